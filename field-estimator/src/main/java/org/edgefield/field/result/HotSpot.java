@@ -17,6 +17,7 @@ package org.edgefield.field.result;
  * @param gap_m distance to the opposing body, infinite where none
  * @param opposing index of the opposing part, -1 where none
  * @param law which law gave the value
+ * @param nodes mesh nodes of the region, rising; reports and the gate take its extent from them
  * @param cure what would mend it
  */
 public record HotSpot(
@@ -34,6 +35,7 @@ public record HotSpot(
     double gap_m,
     int opposing,
     Law law,
+    int[] nodes,
     Cure cure) {
 
   /**
