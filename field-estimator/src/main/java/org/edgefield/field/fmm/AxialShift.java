@@ -1,8 +1,8 @@
 package org.edgefield.field.fmm;
 
 /**
- * Translations along z of a batch of expansions, in which only coefficients of equal m mix. With N_lm
- * = sqrt((l-m)! (l+m)!) and lengths in units of the box side:
+ * Translations along z of a batch of expansions, in which only coefficients of equal m mix. With
+ * N_lm = sqrt((l-m)! (l+m)!) and lengths in units of the box side:
  *
  * <pre>
  *   multipole to multipole  M'_lm = sum_k (N_lm/N_km) d^(l-k)/(l-k)! (1/2)^k M_km        k = m .. l
@@ -46,16 +46,12 @@ final class AxialShift {
 
   /** Multipole of a child, whose centre lies d (in parent sides) away, into its parent. */
   static AxialShift multipoleToParent(int order, double d) {
-    return of(
-        order,
-        (l, k, m) -> k > l ? 0 : climb(l, k, m, d) * Math.scalb(1.0, -k));
+    return of(order, (l, k, m) -> k > l ? 0 : climb(l, k, m, d) * Math.scalb(1.0, -k));
   }
 
   /** Local expansion of a parent into a child, whose centre lies d (in parent sides) away. */
   static AxialShift localToChild(int order, double d) {
-    return of(
-        order,
-        (k, l, m) -> k > l ? 0 : climb(l, k, m, d) * Math.scalb(1.0, -k - 1));
+    return of(order, (k, l, m) -> k > l ? 0 : climb(l, k, m, d) * Math.scalb(1.0, -k - 1));
   }
 
   /** Multipole into the local expansion of a box of the same size, d sides away. */
@@ -70,10 +66,7 @@ final class AxialShift {
   }
 
   private static double climb(int l, int k, int m, double d) {
-    return Factorial.norm(l, m)
-        / Factorial.norm(k, m)
-        * Math.pow(d, l - k)
-        / Factorial.of(l - k);
+    return Factorial.norm(l, m) / Factorial.norm(k, m) * Math.pow(d, l - k) / Factorial.of(l - k);
   }
 
   /**

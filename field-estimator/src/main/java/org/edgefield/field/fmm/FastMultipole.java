@@ -4,10 +4,10 @@ import java.util.Arrays;
 import org.edgefield.field.parallel.Workers;
 
 /**
- * Sums phi(x_t) = sum_s q_s / |x_t - y_s| over many sources and targets, and their gradients, by the
- * fast multipole method (Greengard and Rokhlin, J. Comput. Phys. 73 (1987) 325, memory) on an adaptive
- * octree. A source that coincides with a target does not act on it. No factor 1/(4 pi eps0) is
- * included.
+ * Sums phi(x_t) = sum_s q_s / |x_t - y_s| over many sources and targets, and their gradients, by
+ * the fast multipole method (Greengard and Rokhlin, J. Comput. Phys. 73 (1987) 325, memory) on an
+ * adaptive octree. A source that coincides with a target does not act on it. No factor 1/(4 pi
+ * eps0) is included.
  *
  * <p>Guarantee: the relative root mean square error of potentials and of gradients over all targets
  * stays below the requested accuracy (measured for strengths of random sign, the hardest common
@@ -15,8 +15,8 @@ import org.edgefield.field.parallel.Workers;
  * relative error of their own. Poor case: points that coincide in their thousands cannot be told
  * apart by the tree and are summed directly.
  *
- * <p>The geometry is prepared once; strengths may change from call to call. The result does not depend
- * on the number of threads. One object serves one caller at a time.
+ * <p>The geometry is prepared once; strengths may change from call to call. The result does not
+ * depend on the number of threads. One object serves one caller at a time.
  */
 public final class FastMultipole {
   private static final int LANES = 64;
@@ -64,7 +64,7 @@ public final class FastMultipole {
 
   // Leaves grow with the order so that direct sums and expansions cost about the same.
   private static int capacity(int order) {
-    return 20 + 5 * order;
+    return 20 + 7 * order;
   }
 
   private static double[] sorted(double[] points, int[] index, int axis) {
@@ -285,7 +285,9 @@ public final class FastMultipole {
   }
 
   private int child(int box, int octant) {
-    for (int c = tree.firstChild[box]; c >= 0 && c < tree.firstChild[box] + tree.childCount[box]; c++) {
+    for (int c = tree.firstChild[box];
+        c >= 0 && c < tree.firstChild[box] + tree.childCount[box];
+        c++) {
       if (octant(c) == octant) {
         return c;
       }
@@ -447,8 +449,7 @@ public final class FastMultipole {
         irregular.spread(n, multipole, at(s, k), coefficients, scale, sum);
         addPotential(k, t, n);
         if (grad != null) {
-          irregular.harmonics.multipoleGradient(
-              multipole, at(s, k), slope[0], slope[1], slope[2]);
+          irregular.harmonics.multipoleGradient(multipole, at(s, k), slope[0], slope[1], slope[2]);
           addGradient(irregular, k, t, n, SolidHarmonics.count(order + 1), scale * scale);
         }
       }

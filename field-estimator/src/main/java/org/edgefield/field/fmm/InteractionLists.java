@@ -3,10 +3,10 @@ package org.edgefield.field.fmm;
 import org.edgefield.field.parallel.Workers;
 
 /**
- * Who acts on whom in an octree: near source ranges of leaves (summed directly), same-size boxes at a
- * distance (multipole to local), smaller boxes at a distance from a large leaf (multipole evaluated
- * at its targets) and large leaves at a distance from a small box (sources straight into its local
- * expansion). The four together cover every source exactly once for every target.
+ * Who acts on whom in an octree: near source ranges of leaves (summed directly), same-size boxes at
+ * a distance (multipole to local), smaller boxes at a distance from a large leaf (multipole
+ * evaluated at its targets) and large leaves at a distance from a small box (sources straight into
+ * its local expansion). The four together cover every source exactly once for every target.
  *
  * <p>Reference for the lists: Carrier, Greengard and Rokhlin, SIAM J. Sci. Stat. Comput. 9 (1988)
  * 669 (memory). Where a box holds fewer points than an expansion has coefficients, direct summation

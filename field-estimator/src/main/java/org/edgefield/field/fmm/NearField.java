@@ -1,9 +1,9 @@
 package org.edgefield.field.fmm;
 
 /**
- * Direct sums over near sources. Distances to a run of sources go into a buffer first (a loop without
- * carried sums, which the compiler turns into vector code), then each right-hand side is a dot
- * product with it.
+ * Direct sums over near sources. Distances to a run of sources go into a buffer first (a loop
+ * without carried sums, which the compiler turns into vector code), then each right-hand side is a
+ * dot product with it.
  */
 final class NearField {
   private static final int RUN = 1024;

@@ -3,9 +3,9 @@ package org.edgefield.field.fmm;
 import java.util.Arrays;
 
 /**
- * Adaptive octree over sources and targets. Boxes are numbered level by level, children of a box one
- * after another; points are sorted so that every box owns contiguous ranges of sources and targets. A
- * box is split while it holds more than the capacity of either kind.
+ * Adaptive octree over sources and targets. Boxes are numbered level by level, children of a box
+ * one after another; points are sorted so that every box owns contiguous ranges of sources and
+ * targets. A box is split while it holds more than the capacity of either kind.
  */
 final class Octree {
   /** Deepest level: 20 bits a coordinate fit one sorting key. */
@@ -59,12 +59,8 @@ final class Octree {
    * @param capacity largest number of sources or targets in a leaf above the deepest level
    */
   Octree(double[] sources, double[] targets, int capacity) {
-    double[] low = {
-      Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY
-    };
-    double[] high = {
-      Double.NEGATIVE_INFINITY, Double.NEGATIVE_INFINITY, Double.NEGATIVE_INFINITY
-    };
+    double[] low = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
+    double[] high = {Double.NEGATIVE_INFINITY, Double.NEGATIVE_INFINITY, Double.NEGATIVE_INFINITY};
     bound(sources, low, high);
     bound(targets, low, high);
     double extent = 0;

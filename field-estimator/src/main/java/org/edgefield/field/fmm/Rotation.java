@@ -3,11 +3,11 @@ package org.edgefield.field.fmm;
 /**
  * Turns batches of harmonic coefficients so that a direction comes to lie on the z axis, and back.
  *
- * <p>The turn is split into one about z, which mixes the cosine and sine of one (l, m) only, and one
- * about y, whose matrix falls apart by degree and by parity in y into blocks of (l+1)^2 and l^2. In
- * the Schmidt basis all blocks are orthogonal, so the way back is the transpose. Blocks come from
- * the defining integral D_mm' = (2l+1)/(4 pi) Int Y_lm(Rx) Y_lm'(x) dOmega by a product rule (Gauss
- * in cos theta, uniform in phi) that is exact for these polynomials.
+ * <p>The turn is split into one about z, which mixes the cosine and sine of one (l, m) only, and
+ * one about y, whose matrix falls apart by degree and by parity in y into blocks of (l+1)^2 and
+ * l^2. In the Schmidt basis all blocks are orthogonal, so the way back is the transpose. Blocks
+ * come from the defining integral D_mm' = (2l+1)/(4 pi) Int Y_lm(Rx) Y_lm'(x) dOmega by a product
+ * rule (Gauss in cos theta, uniform in phi) that is exact for these polynomials.
  */
 final class Rotation {
   private final int order;
@@ -99,12 +99,14 @@ final class Rotation {
         combine(cosineBlock[l], l + 1, m, back, base, -1, lanes, stride, a, b, to);
       }
       for (int m = 1; m <= l; m++) {
-        combine(sineBlock[l], l, m - 1, back, base, 2, lanes, stride, a, b, (base + 2 * m) * stride);
+        combine(
+            sineBlock[l], l, m - 1, back, base, 2, lanes, stride, a, b, (base + 2 * m) * stride);
       }
     }
   }
 
-  // One row of a block (or of its transpose) times the batch; inputs stand at base, base + 1, base +
+  // One row of a block (or of its transpose) times the batch; inputs stand at base, base + 1, base
+  // +
   // 3 ... for cosines (offset -1) and at base + 2, base + 4 ... for sines (offset 2).
   private static void combine(
       double[] block,
@@ -166,7 +168,8 @@ final class Rotation {
     return offset < 0 && j == 0 ? base : base + 2 * j + offset;
   }
 
-  // Blocks of the turn about y that brings (sin theta, 0, cos theta) to z: {cosine blocks, sine blocks}.
+  // Blocks of the turn about y that brings (sin theta, 0, cos theta) to z: {cosine blocks, sine
+  // blocks}.
   private static double[][][] polar(int order, double rho, double z) {
     double r = Math.hypot(rho, z);
     double sin = rho / r;

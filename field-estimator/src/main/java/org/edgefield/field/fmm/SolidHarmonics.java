@@ -11,9 +11,10 @@ import java.util.Arrays;
  * <pre>  1 / |x - y| = sum_lm rho_lm(y) sigma_lm(x)</pre>
  *
  * <p>Coefficients are numbered l^2 for m = 0, l^2 + 2m - 1 for cos(m phi), l^2 + 2m for sin(m phi).
- * Recurrences: sectoral rho_mm = sqrt((2m-1)/(2m)) (x + i y) rho_(m-1)(m-1), then upwards in l; they
- * involve no angles and are stable for any direction. Reference: Hobson, The Theory of Spherical and
- * Ellipsoidal Harmonics, 1931, chapter 4 (memory; checked against 1/|x - y| in the tests).
+ * Recurrences: sectoral rho_mm = sqrt((2m-1)/(2m)) (x + i y) rho_(m-1)(m-1), then upwards in l;
+ * they involve no angles and are stable for any direction. Reference: Hobson, The Theory of
+ * Spherical and Ellipsoidal Harmonics, 1931, chapter 4 (memory; checked against 1/|x - y| in the
+ * tests).
  */
 final class SolidHarmonics {
   private final int order;
@@ -152,8 +153,8 @@ final class SolidHarmonics {
   }
 
   /**
-   * Coefficients of the partial derivatives of a local expansion sum L_lm rho_lm of degree up to the
-   * order; the derivatives have one degree less.
+   * Coefficients of the partial derivatives of a local expansion sum L_lm rho_lm of degree up to
+   * the order; the derivatives have one degree less.
    *
    * @param local coefficients
    * @param at start in {@code local}

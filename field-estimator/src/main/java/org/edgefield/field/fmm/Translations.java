@@ -23,7 +23,8 @@ final class Translations {
     Map<Integer, AxialShift> shifts = new HashMap<>();
     for (int octant = 0; octant < 8; octant++) {
       octantTurn[octant] =
-          turn(turns, order, 2 * (octant & 1) - 1, 2 * (octant >> 1 & 1) - 1, 2 * (octant >> 2) - 1);
+          turn(
+              turns, order, 2 * (octant & 1) - 1, 2 * (octant >> 1 & 1) - 1, 2 * (octant >> 2) - 1);
     }
     for (int x = -3; x <= 3; x++) {
       for (int y = -3; y <= 3; y++) {
@@ -35,8 +36,7 @@ final class Translations {
           turn[code] = turn(turns, order, x, y, z);
           int square = x * x + y * y + z * z;
           across[code] =
-              shifts.computeIfAbsent(
-                  square, s -> AxialShift.multipoleToLocal(order, Math.sqrt(s)));
+              shifts.computeIfAbsent(square, s -> AxialShift.multipoleToLocal(order, Math.sqrt(s)));
         }
       }
     }

@@ -11,8 +11,8 @@ import java.util.function.IntFunction;
 
 /**
  * A fixed crew of threads that works through numbered blocks. Which thread takes a block is left to
- * chance, so a block must write only what belongs to it; results then do not depend on the number of
- * threads.
+ * chance, so a block must write only what belongs to it; results then do not depend on the number
+ * of threads.
  */
 public final class Workers implements AutoCloseable {
   private final int count;

@@ -1,6 +1,7 @@
 package org.edgefield.field.fmm;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
 
 import java.util.Arrays;
 import java.util.Random;
@@ -17,11 +18,27 @@ class FastMultipoleTest {
 
   @ParameterizedTest
   @CsvSource({
-    "sphere, 1e-2", "sphere, 1e-3", "sphere, 1e-4", "sphere, 1e-5", "sphere, 1e-6",
-    "sphere, 1e-7", "sphere, 1e-8", "sphere, 1e-9",
-    "cube, 1e-2", "cube, 1e-3", "cube, 1e-4", "cube, 1e-6", "cube, 1e-9",
-    "needle, 1e-2", "needle, 1e-4", "needle, 1e-6", "needle, 1e-9",
-    "graded, 1e-2", "graded, 1e-4", "graded, 1e-6", "graded, 1e-9"
+    "sphere, 1e-2",
+    "sphere, 1e-3",
+    "sphere, 1e-4",
+    "sphere, 1e-5",
+    "sphere, 1e-6",
+    "sphere, 1e-7",
+    "sphere, 1e-8",
+    "sphere, 1e-9",
+    "cube, 1e-2",
+    "cube, 1e-3",
+    "cube, 1e-4",
+    "cube, 1e-6",
+    "cube, 1e-9",
+    "needle, 1e-2",
+    "needle, 1e-4",
+    "needle, 1e-6",
+    "needle, 1e-9",
+    "graded, 1e-2",
+    "graded, 1e-4",
+    "graded, 1e-6",
+    "graded, 1e-9"
   })
   void errorIsBelowTheRequest(String shape, double tolerance) {
     double[] sources = points(shape, N, 1);
@@ -34,8 +51,6 @@ class FastMultipoleTest {
     }
     for (int k = 0; k < 2; k++) {
       double[] error = errors(sources, targets, q[k], phi[k], grad[k]);
-      System.out.printf(
-          java.util.Locale.ROOT, "%s %.0e: potential %.1e gradient %.1e%n", shape, tolerance, error[0], error[1]);
       assertThat(error[0]).as("potential").isLessThan(tolerance);
       assertThat(error[1]).as("gradient").isLessThan(tolerance);
     }
@@ -80,7 +95,7 @@ class FastMultipoleTest {
       assertThat(phi[0][0]).isZero();
       new FastMultipole(new double[] {0, 0, 0}, new double[] {0, 3, 4}, 1e-4, workers)
           .sum(new double[][] {{5}}, phi, null);
-      assertThat(phi[0][0]).isEqualTo(1.0);
+      assertThat(phi[0][0]).isCloseTo(1.0, within(1e-4));
       // Many points in one place: the deepest box holds them all.
       double[] heap = new double[3 * 500];
       double[] ones = new double[500];
@@ -88,11 +103,11 @@ class FastMultipoleTest {
       heap[0] = 1;
       new FastMultipole(heap, new double[] {0, 0, 0}, 1e-4, workers)
           .sum(new double[][] {ones}, phi, null);
-      assertThat(phi[0][0]).isEqualTo(1.0);
+      assertThat(phi[0][0]).isCloseTo(1.0, within(1e-4));
     }
   }
 
-  private static double[] errors(
+  static double[] errors(
       double[] sources, double[] targets, double[] q, double[] phi, double[] grad) {
     double[] error = new double[2];
     double[] size = new double[2];
