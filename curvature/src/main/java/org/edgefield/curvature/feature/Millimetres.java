@@ -18,7 +18,7 @@ final class Millimetres {
   /** A length without its unit. */
   static String of(double metres) {
     if (Double.isInfinite(metres) || Double.isNaN(metres)) {
-      return metres > 0 ? "infinite" : "unknown";
+      return Double.isNaN(metres) ? "unknown" : "infinite";
     }
     BigDecimal mm = BigDecimal.valueOf(metres).movePointRight(3);
     BigDecimal rounded =

@@ -40,7 +40,7 @@ public final class PartSummaries {
   /**
    * Summary per part, in the order of the parts.
    *
-   * @param nodes nodes of the mesh, per face or on smooth patches
+   * @param nodes per-face nodes of the mesh, so that each radius belongs to its own face
    */
   public static List<PartSummary> of(
       List<Part> parts,
@@ -130,7 +130,8 @@ public final class PartSummaries {
       int face = mesh.triangleFace()[c / 3];
       double k = nodes.k1()[nodes.cornerNode()[c]];
       int part = geometry.facePart(face);
-      if (!pointed[face] && k > largest[part]) {
+      // Of equal radii the first face is named, whatever the last bits say.
+      if (!pointed[face] && k > largest[part] * (1 + 1e-9)) {
         largest[part] = k;
         largestFace[part] = face;
       }
