@@ -113,11 +113,18 @@ public final class TriangleCursor {
    * @return whether a triangle lies within that distance
    */
   public boolean nearest(double x, double y, double z, double within) {
+    int hint = slot;
     slot = -1;
     if (tree.link.length == 0) {
       return false;
     }
     double best = within * within;
+    if (hint >= 0 && allowed[tree.group[hint]]) {
+      // Queries often follow each other closely. The last answer's distance, a little enlarged,
+      // bounds this one; what is found does not depend on it.
+      closest(hint, x, y, z);
+      best = Math.min(best, square * (1 + 1e-12) + Double.MIN_NORMAL);
+    }
     int top = 0;
     stack[top] = 0;
     stackKey[top++] = boxSquare(0, x, y, z);
@@ -133,11 +140,17 @@ public final class TriangleCursor {
         double d1 = boxSquare(first, x, y, z);
         double d2 = boxSquare(second, x, y, z);
         boolean swap = d1 > d2;
+        double far = swap ? d1 : d2;
+        double near = swap ? d2 : d1;
         // The nearer child goes on top.
-        stack[top] = swap ? first : second;
-        stackKey[top++] = swap ? d1 : d2;
-        stack[top] = swap ? second : first;
-        stackKey[top++] = swap ? d2 : d1;
+        if (far <= best) {
+          stack[top] = swap ? first : second;
+          stackKey[top++] = far;
+        }
+        if (near <= best) {
+          stack[top] = swap ? second : first;
+          stackKey[top++] = near;
+        }
         continue;
       }
       int from = tree.link[node];
