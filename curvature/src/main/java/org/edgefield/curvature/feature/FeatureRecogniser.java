@@ -97,10 +97,10 @@ public final class FeatureRecogniser implements Features {
     return new FeatureRecogniser(geometry, mesh);
   }
 
-  /** Distinct end vertices of an edge. */
+  /** Distinct end vertices of an edge; a closed curve may have none. */
   private int[] ends(int edge) {
     int[] v = geometry.edgeVertices(edge);
-    return v[0] == v[1] ? new int[] {v[0]} : v;
+    return v[0] == v[1] ? Arrays.copyOf(v, v[0] < 0 ? 0 : 1) : v;
   }
 
   private void surround() {
@@ -232,7 +232,10 @@ public final class FeatureRecogniser implements Features {
       case SHARP_CONCAVE -> "concave edge " + angles(f);
       case MIXED -> "partly sharp edge " + angles(f);
       case TANGENT, SEAM -> faceName(tighterFace(edge));
-      case DEGENERATE -> vertexName(geometry.edgeVertices(edge)[0]);
+      case DEGENERATE -> {
+        int[] ends = ends(edge);
+        yield ends.length == 0 ? "point" : vertexName(ends[0]);
+      }
     };
   }
 

@@ -85,13 +85,13 @@ public final class PartSummaries {
         sharpest[part] = Math.min(sharpest[part], f.sharpest_rad());
       }
       for (int v : geometry.edgeVertices(e)) {
-        if (!seen[v]) {
+        if (v >= 0 && !seen[v]) {
           seen[v] = true;
           corners[part] += features.isCorner(v) ? 1 : 0;
         }
       }
       if (f.edgeClass() == EdgeClass.DEGENERATE
-          && features.vertexName(geometry.edgeVertices(e)[0]).equals(FeatureRecogniser.TIP)) {
+          && features.edgeName(e).equals(FeatureRecogniser.TIP)) {
         tips[part]++;
         pointed[Math.max(faces[0], faces[1])] = true;
       }

@@ -253,8 +253,7 @@ public final class NodeBuilder {
       uv[2 * i + 1] = mesh.cornerUv()[2 * pointCorner[i] + 1];
     }
     int stride = ExactGeometry.CURVATURE_STRIDE;
-    double[] c = new double[stride * points];
-    geometry.curvature(points, face, uv, c);
+    double[] c = CurvatureBatch.evaluate(geometry, face, uv);
 
     double[] normal = new double[3 * nodes];
     double[] k1 = new double[nodes];
