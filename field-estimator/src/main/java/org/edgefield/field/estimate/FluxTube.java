@@ -1,0 +1,159 @@
+package org.edgefield.field.estimate;
+
+import org.edgefield.field.edge.RoundedWedge;
+
+/**
+ * How a thin flux tube widens on its way from a point of a conductor into the gas.
+ *
+ * <p>With A(s) the tube's cross-section at the distance s along the normal over that at the
+ * conductor, the field there is E = U / Int_0^d ds / A(s). A is a product over the two principal
+ * directions. In each direction one of two forms holds:
+ *
+ * <ul>
+ *   <li>smooth: A = sqrt(1 + 2 k s + c s^2), the law of an ellipsoid's axis: with c = k^2 it is the
+ *       cylinder's or sphere's 1 + k s, with c = 1/b^2 the axis of an ellipsoid of half-width b,
+ *       exact for isolated spheroids, discs and their neighbours; concave directions keep 1 + k s;
+ *   <li>rounded edge of a thick body: the spread of {@link RoundedWedge} up to the body's thickness
+ *       t, then that of a plate of width w, then that of a wire:
+ *       <pre>A = spread(s / r) (1 + s / (a t))^(1/2 - sigma) (1 + s / (b w))^(1/2)</pre>
+ * </ul>
+ *
+ * <p>Mutable so that one object serves millions of points; one thread at a time.
+ */
+final class FluxTube {
+  /** Share of the thickness at which an edge stops to act alone; from the bars of the tests. */
+  static final double THICKNESS_SHARE = 1.0;
+
+  /** Share of the width at which a bar acts as a wire; from the bars of the tests. */
+  static final double WIDTH_SHARE = 1.0;
+
+  /** Nodes and weights of the 5-point Gauss-Legendre rule on 0..1. */
+  private static final double[] NODE = {
+    0.046910077030668, 0.230765344947158, 0.5, 0.769234655052842, 0.953089922969332
+  };
+
+  private static final double[] WEIGHT = {
+    0.118463442528095, 0.239314335249683, 0.284444444444444, 0.239314335249683, 0.118463442528095
+  };
+
+  /** Widest panel of the quadrature in the logarithm of the distance. */
+  private static final double PANEL = 1.2;
+
+  /** Distance, in the tube's own scale, beyond which A is taken as a power. */
+  private static final double FAR = 1e7;
+
+  private double k1;
+  private double k2;
+  private double c1;
+  private double c2;
+  private RoundedWedge wedge;
+  private boolean corner;
+  private double radius;
+  private double thickness;
+  private double width;
+
+  /** A smooth surface. */
+  FluxTube smooth(double k1, double c1, double k2, double c2) {
+    this.k1 = k1;
+    this.c1 = c1;
+    this.k2 = k2;
+    this.c2 = c2;
+    wedge = null;
+    corner = false;
+    return this;
+  }
+
+  /** A rounded edge with its curvature k2 and the term c2 along the edge. */
+  FluxTube edge(
+      RoundedWedge wedge, double radius, double thickness, double width, double k2, double c2) {
+    this.k1 = 1 / radius;
+    this.c1 = 0;
+    this.k2 = k2;
+    this.c2 = c2;
+    this.wedge = wedge;
+    corner = false;
+    this.radius = radius;
+    this.thickness = thickness;
+    this.width = width;
+    return this;
+  }
+
+  /**
+   * A corner where sharp edges meet, made with one radius: the product of the edge law in two
+   * directions, and the body's length at the end. Wider than a true corner, so the field errs on
+   * the high side.
+   */
+  FluxTube corner(RoundedWedge wedge, double radius, double thickness, double width, double c2) {
+    edge(wedge, radius, thickness, width, 1 / radius, c2);
+    corner = true;
+    return this;
+  }
+
+  /** Cross-section at a distance over that at the conductor; {@code reach} is the gap. */
+  double growth(double s, double reach) {
+    double across;
+    if (wedge == null) {
+      across = direction(k1, c1, s, reach);
+    } else {
+      across =
+          wedge.spread(s / radius)
+              * Math.pow(1 + s / (THICKNESS_SHARE * thickness), 0.5 - wedge.exponent())
+              * Math.sqrt(1 + s / (WIDTH_SHARE * width));
+    }
+    if (corner) {
+      return across * across;
+    }
+    return across * direction(k2, c2, s, reach);
+  }
+
+  private static double direction(double k, double c, double s, double reach) {
+    return k < 0 ? 1 + ParallelSurfacesLaw.held(k, reach) * s : Math.sqrt(1 + s * (2 * k + c * s));
+  }
+
+  private boolean parallel() {
+    return wedge == null && parallel(k1, c1) && parallel(k2, c2);
+  }
+
+  private static boolean parallel(double k, double c) {
+    return k < 0 || c == k * k;
+  }
+
+  /**
+   * Int_0^x ds / A(s).
+   *
+   * @param x upper limit, may be infinite
+   * @param reach the gap, x or more
+   */
+  double resistance(double x, double reach) {
+    if (parallel() && x == reach) {
+      return ParallelSurfacesLaw.resistance_m(k1, k2, x);
+    }
+    double slope = Math.max(k1, 0) + Math.max(k2, 0) + Math.sqrt(c1) + Math.sqrt(c2);
+    if (slope == 0 && x == Double.POSITIVE_INFINITY) {
+      return Double.POSITIVE_INFINITY;
+    }
+    double scale = slope == 0 ? x : 1 / slope;
+    double far = Math.min(x, FAR * scale);
+    double end = Math.log1p(far / scale);
+    int panels = (int) Math.ceil(end / PANEL);
+    double sum = 0;
+    double h = end / panels;
+    for (int i = 0; i < panels; i++) {
+      for (int g = 0; g < NODE.length; g++) {
+        double e = Math.exp((i + NODE[g]) * h);
+        sum += WEIGHT[g] * h * scale * e / growth(scale * (e - 1), reach);
+      }
+    }
+    if (x > far) {
+      // A ~ s^power beyond: two-dimensional bodies (power 1) have no field at infinite distance.
+      double a = growth(far, reach);
+      double power = Math.log(growth(2 * far, reach) / a) / Math.log(2);
+      if (power <= 1.001) {
+        return Double.POSITIVE_INFINITY;
+      }
+      double tail = far / (a * (power - 1));
+      sum += x == Double.POSITIVE_INFINITY ? tail : tail * (1 - Math.pow(far / x, power - 1));
+    }
+    return sum;
+  }
+}

@@ -1,0 +1,380 @@
+package org.edgefield.field.estimate;
+
+import java.util.Arrays;
+import java.util.HashMap;
+import java.util.Map;
+import java.util.stream.IntStream;
+import org.edgefield.curvature.EdgeClass;
+import org.edgefield.curvature.EdgeFeature;
+import org.edgefield.curvature.Features;
+import org.edgefield.curvature.Features.RoundedEdge;
+import org.edgefield.curvature.SurfaceNodes;
+import org.edgefield.field.edge.RoundedWedge;
+import org.edgefield.field.hotspot.NodeFaces;
+import org.edgefield.field.job.EdgesAsMade;
+import org.edgefield.field.result.Law;
+import org.edgefield.importer.brep.Assembly;
+import org.edgefield.importer.brep.Part;
+import org.edgefield.importer.mesh.SurfaceMesh;
+import org.edgefield.importer.mesh.spatial.TriangleCursor;
+import org.edgefield.importer.mesh.spatial.TriangleTree;
+
+/** Lays the sites of an estimate: curvatures, edges, and the size of the body behind each. */
+final class SiteBuilder {
+  /** Sites per block of parallel work. */
+  static final int BLOCK = 512;
+
+  /** Radii below this are no edges any more. */
+  private static final double LEAST_RADIUS = 1e-7;
+
+  private final Assembly assembly;
+  private final SurfaceMesh mesh;
+  private final SurfaceNodes nodes;
+  private final Features features;
+  private final EdgesAsMade asMade;
+  private final TriangleTree tree;
+
+  /** A face of each node: its smallest convex rounded edge where it has one, else any. */
+  private final int[] nodeFace;
+
+  private final RoundedEdge[] rounded;
+
+  /** Nodes of each vertex as linked lists, -1 at the end. */
+  private final int[] firstNode;
+
+  private final int[] nextNode;
+
+  SiteBuilder(
+      Assembly assembly,
+      SurfaceMesh mesh,
+      SurfaceNodes nodes,
+      Features features,
+      EdgesAsMade asMade,
+      TriangleTree tree) {
+    this.assembly = assembly;
+    this.mesh = mesh;
+    this.nodes = nodes;
+    this.features = features;
+    this.asMade = asMade;
+    this.tree = tree;
+    int faces = assembly.geometry().faceCount();
+    rounded = NodeFaces.rounded(features, faces);
+    firstNode = new int[mesh.vertexCount()];
+    nextNode = new int[nodes.count()];
+    Arrays.fill(firstNode, -1);
+    for (int n = nodes.count() - 1; n >= 0; n--) {
+      int v = nodes.nodeVertex()[n];
+      nextNode[n] = firstNode[v];
+      firstNode[v] = n;
+    }
+    nodeFace = NodeFaces.of(mesh, nodes, rounded);
+  }
+
+  Sites build() {
+    int[] siteOfVertex = new int[mesh.vertexCount()];
+    int[] siteOfNode = new int[nodes.count()];
+    int count = number(siteOfVertex, siteOfNode);
+    Sites sites = new Sites(siteOfNode, count);
+    Arrays.fill(sites.node, -1);
+    for (int n = 0; n < nodes.count(); n++) {
+      int s = siteOfNode[n];
+      int v = nodes.nodeVertex()[n];
+      if (sites.node[s] < 0) {
+        sites.node[s] = n;
+        sites.part[s] = assembly.geometry().facePart(nodeFace[n]);
+        System.arraycopy(mesh.xyz(), 3 * v, sites.position, 3 * s, 3);
+        sites.k1[s] = nodes.k1()[n];
+        sites.k2[s] = nodes.k2()[n];
+        sites.law[s] = (byte) Law.PARALLEL_SURFACES.ordinal();
+      }
+      for (int c = 0; c < 3; c++) {
+        sites.normal[3 * s + c] += nodes.normal()[3 * n + c];
+      }
+    }
+    normalise(sites.normal);
+    double[] depth = new double[count];
+    int blocks = (count + BLOCK - 1) / BLOCK;
+    IntStream.range(0, blocks)
+        .parallel()
+        .forEach(
+            b -> {
+              TriangleCursor cursor = tree.cursor();
+              int to = Math.min(count, (b + 1) * BLOCK);
+              for (int s = b * BLOCK; s < to; s++) {
+                smooth(sites, s, depth, cursor);
+              }
+            });
+    roundedEdges(sites, depth);
+    sharpEdges(sites, siteOfVertex);
+    return sites;
+  }
+
+  /** Numbers the sites; vertices on sharp convex edges and corners get one of their own. */
+  private int number(int[] siteOfVertex, int[] siteOfNode) {
+    boolean[] sharp = new boolean[mesh.vertexCount()];
+    for (int g = 0; g < mesh.segmentCount(); g++) {
+      EdgeClass c = features.edge(mesh.segmentEdge()[g]).edgeClass();
+      if (c == EdgeClass.SHARP_CONVEX || c == EdgeClass.MIXED) {
+        sharp[mesh.segmentVertices()[2 * g]] = true;
+        sharp[mesh.segmentVertices()[2 * g + 1]] = true;
+      }
+    }
+    Arrays.fill(siteOfVertex, -1);
+    int count = 0;
+    for (int n = 0; n < nodes.count(); n++) {
+      int v = nodes.nodeVertex()[n];
+      if (!sharp[v]) {
+        siteOfNode[n] = count++;
+        continue;
+      }
+      if (siteOfVertex[v] < 0) {
+        siteOfVertex[v] = count++;
+      }
+      siteOfNode[n] = siteOfVertex[v];
+    }
+    return count;
+  }
+
+  private static void normalise(double[] v) {
+    for (int i = 0; i < v.length; i += 3) {
+      double length = Math.sqrt(v[i] * v[i] + v[i + 1] * v[i + 1] + v[i + 2] * v[i + 2]);
+      double f = length > 0 ? 1 / length : 0;
+      v[i] *= f;
+      v[i + 1] *= f;
+      v[i + 2] *= f;
+    }
+  }
+
+  /** Curvature terms of a smooth site from the depth and breadth of the body behind it. */
+  private void smooth(Sites sites, int s, double[] depth, TriangleCursor cursor) {
+    int n = sites.node[s];
+    double k1 = sites.k1[s];
+    double k2 = sites.k2[s];
+    Part part = assembly.parts().get(sites.part[s]);
+    double[] d1 = Arrays.copyOfRange(nodes.direction1(), 3 * n, 3 * n + 3);
+    double[] normal = Arrays.copyOfRange(sites.normal, 3 * s, 3 * s + 3);
+    double[] d2 = cross(normal, d1);
+    double half1 = halfExtent(part, d1);
+    double half2 = halfExtent(part, d2);
+    double size = part.size_m();
+    cursor.allowOnly(sites.part[s]);
+    double[] p = Arrays.copyOfRange(sites.position, 3 * s, 3 * s + 3);
+    depth[s] = chord(cursor, p, normal, -1, 1e-6 * size, size);
+    double a = depth[s] / 2;
+    sites.c1[s] = quadratic(cursor, p, normal, a, d1, k1, half1, size);
+    sites.c2[s] = quadratic(cursor, p, normal, a, d2, k2, half2, size);
+  }
+
+  /** Length of the ray from a point until it leaves the part. */
+  private static double chord(
+      TriangleCursor cursor, double[] p, double[] d, double sign, double start, double size) {
+    boolean hit =
+        cursor.ray(
+            p[0] + sign * d[0] * start,
+            p[1] + sign * d[1] * start,
+            p[2] + sign * d[2] * start,
+            sign * d[0],
+            sign * d[1],
+            sign * d[2],
+            0,
+            2 * size,
+            TriangleCursor.Side.LEAVING);
+    return hit ? cursor.distance() + start : size;
+  }
+
+  private static double quadratic(
+      TriangleCursor cursor,
+      double[] p,
+      double[] normal,
+      double a,
+      double[] d,
+      double k,
+      double half,
+      double size) {
+    double least = 1 / (half * half);
+    if (k * k <= least) {
+      return least;
+    }
+    double[] middle = {p[0] - a * normal[0], p[1] - a * normal[1], p[2] - a * normal[2]};
+    double breadth =
+        Math.min(chord(cursor, middle, d, 1, 0, size), chord(cursor, middle, d, -1, 0, size));
+    double byBreadth = 1 / (breadth * breadth);
+    return k > 0 ? Math.max(least, Math.min(k * k, Math.max(k / a, byBreadth))) : least;
+  }
+
+  private static double halfExtent(Part part, double[] d) {
+    double[] b = part.bounds_m();
+    double sum = 0;
+    for (int c = 0; c < 3; c++) {
+      sum += Math.abs(d[c]) * (b[c + 3] - b[c]) / 2;
+    }
+    return sum;
+  }
+
+  private static double[] cross(double[] a, double[] b) {
+    return new double[] {
+      a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]
+    };
+  }
+
+  /** Turns sites on recognised rounded edges of bodies thicker than the round into edge sites. */
+  private void roundedEdges(Sites sites, double[] depth) {
+    double[] thin = new double[rounded.length];
+    double[] wide = new double[rounded.length];
+    Arrays.fill(thin, Double.POSITIVE_INFINITY);
+    for (int s = 0; s < sites.count(); s++) {
+      int f = nodeFace[sites.node[s]];
+      thin[f] = Math.min(thin[f], depth[s]);
+      wide[f] = Math.max(wide[f], depth[s]);
+    }
+    Map<Integer, RoundedWedge> wedges = new HashMap<>();
+    for (int s = 0; s < sites.count(); s++) {
+      int f = nodeFace[sites.node[s]];
+      RoundedEdge r = rounded[f];
+      if (r == null || sites.k1[s] <= 0 && sites.k2[s] < 0) {
+        continue;
+      }
+      double radius = r.radius_m();
+      RoundedWedge wedge =
+          wedges.computeIfAbsent(
+              f, x -> RoundedWedge.ofInteriorAngle(Math.max(0, Math.PI - r.turning_rad())));
+      double t = Math.max(thin[f], 2 * radius);
+      double w = Math.max(wide[f], 2 * radius);
+      // Curvature along the edge: what is left beside the round's own.
+      double across = 1 / radius;
+      double k1 = sites.k1[s];
+      double k2 = sites.k2[s];
+      double along = Math.abs(k2 - across) < Math.abs(k1 - across) ? Math.min(k1, across) : k2;
+      sites.form[s] = Sites.EDGE;
+      sites.law[s] = (byte) Law.ROUNDED_WEDGE.ordinal();
+      sites.wedge[s] = wedge;
+      sites.thickness[s] = t;
+      sites.width[s] = w;
+      sites.k1[s] = across;
+      sites.k2[s] = along;
+    }
+  }
+
+  /** Sharp edges and corners with their radius as made. */
+  private void sharpEdges(Sites sites, int[] siteOfVertex) {
+    int vertices = mesh.vertexCount();
+    double[] sharpest = new double[vertices];
+    Arrays.fill(sharpest, Double.POSITIVE_INFINITY);
+    double[] tangent = new double[3 * vertices];
+    for (int g = 0; g < mesh.segmentCount(); g++) {
+      int edge = mesh.segmentEdge()[g];
+      EdgeClass c = features.edge(edge).edgeClass();
+      if (c != EdgeClass.SHARP_CONVEX && c != EdgeClass.MIXED) {
+        continue;
+      }
+      for (int end = 0; end < 2; end++) {
+        int v = mesh.segmentVertices()[2 * g + end];
+        double angle = angleAt(edge, mesh.segmentT()[2 * g + end]);
+        if (angle < sharpest[v]) {
+          sharpest[v] = angle;
+          for (int k = 0; k < 3; k++) {
+            tangent[3 * v + k] =
+                mesh.xyz()[3 * mesh.segmentVertices()[2 * g + 1] + k]
+                    - mesh.xyz()[3 * mesh.segmentVertices()[2 * g] + k];
+          }
+        }
+      }
+    }
+    normalise(tangent);
+    double[] sumNormals = new double[3 * sites.count()];
+    double[] along = new double[sites.count()];
+    int[] patches = new int[sites.count()];
+    for (int n = 0; n < nodes.count(); n++) {
+      int v = nodes.nodeVertex()[n];
+      int s = siteOfVertex[v];
+      if (s < 0) {
+        continue;
+      }
+      for (int k = 0; k < 3; k++) {
+        sumNormals[3 * s + k] += nodes.normal()[3 * n + k];
+      }
+      along[s] += normalCurvature(n, tangent, 3 * v);
+      patches[s]++;
+    }
+    TriangleCursor cursor = tree.cursor();
+    for (int v = 0; v < vertices; v++) {
+      int s = siteOfVertex[v];
+      if (s < 0 || !(sharpest[v] < Math.PI - Math.toRadians(1))) {
+        continue;
+      }
+      double radius = Math.max(asMade.radius_m(sites.part[s]), LEAST_RADIUS);
+      boolean corner =
+          mesh.vertexKind()[v] == SurfaceMesh.ON_VERTEX
+              && features.isCorner(mesh.vertexEntity()[v]);
+      Part part = assembly.parts().get(sites.part[s]);
+      double sum =
+          Math.sqrt(
+              sumNormals[3 * s] * sumNormals[3 * s]
+                  + sumNormals[3 * s + 1] * sumNormals[3 * s + 1]
+                  + sumNormals[3 * s + 2] * sumNormals[3 * s + 2]);
+      double[] d = Arrays.copyOfRange(tangent, 3 * v, 3 * v + 3);
+      double half = halfExtent(part, d);
+      sites.form[s] = corner ? Sites.CORNER : Sites.EDGE;
+      sites.law[s] = (byte) (corner ? Law.CORNER_AS_MADE.ordinal() : Law.EDGE_AS_MADE.ordinal());
+      sites.wedge[s] = RoundedWedge.ofInteriorAngle(Math.max(0, sharpest[v]));
+      sites.k1[s] = 1 / radius;
+      sites.k2[s] = corner ? 1 / radius : patches[s] > 1 && sum > 0.1 ? along[s] / sum : 0;
+      sites.c2[s] = Math.max(1 / (half * half), sites.k2[s] > 0 ? sq(sites.k2[s]) : 0);
+      behind(sites, s, v, radius, part, cursor);
+    }
+  }
+
+  /**
+   * Thickness and width behind a sharp edge: rays along the faces' normals from the round's centre.
+   */
+  private void behind(Sites sites, int s, int v, double radius, Part part, TriangleCursor cursor) {
+    cursor.allowOnly(part.index());
+    double size = part.size_m();
+    double shift = Math.max(radius, 1e-5 * size);
+    double[] p = new double[3];
+    for (int k = 0; k < 3; k++) {
+      p[k] = sites.position[3 * s + k] - shift * sites.normal[3 * s + k];
+    }
+    double thin = Double.POSITIVE_INFINITY;
+    double wide = 0;
+    for (int n = firstNode[v]; n >= 0; n = nextNode[n]) {
+      double[] normal = Arrays.copyOfRange(nodes.normal(), 3 * n, 3 * n + 3);
+      double t = chord(cursor, p, normal, -1, 0, size) + shift;
+      thin = Math.min(thin, t);
+      wide = Math.max(wide, t);
+    }
+    sites.thickness[s] = Math.max(thin, 2 * radius);
+    sites.width[s] = Math.max(wide, 2 * radius);
+  }
+
+  /** Interior angle at a curve parameter, linear between the samples. */
+  private double angleAt(int edge, double t) {
+    EdgeFeature feature = features.edge(edge);
+    double[] ts = feature.t();
+    double[] angles = feature.interiorAngle_rad();
+    int i = Arrays.binarySearch(ts, t);
+    if (i >= 0) {
+      return angles[i];
+    }
+    int right = -i - 1;
+    if (right == 0 || right == ts.length) {
+      return angles[right == 0 ? 0 : ts.length - 1];
+    }
+    double w = (t - ts[right - 1]) / (ts[right] - ts[right - 1]);
+    return angles[right - 1] * (1 - w) + angles[right] * w;
+  }
+
+  /** Curvature of the surface at a node along a unit tangent (Euler's formula). */
+  private double normalCurvature(int n, double[] tangent, int at) {
+    double c = 0;
+    for (int k = 0; k < 3; k++) {
+      c += nodes.direction1()[3 * n + k] * tangent[at + k];
+    }
+    double cos2 = Math.min(1, c * c);
+    return nodes.k1()[n] * cos2 + nodes.k2()[n] * (1 - cos2);
+  }
+
+  private static double sq(double x) {
+    return x * x;
+  }
+}

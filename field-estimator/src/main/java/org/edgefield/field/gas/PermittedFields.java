@@ -1,0 +1,37 @@
+package org.edgefield.field.gas;
+
+import org.edgefield.field.job.Permitted;
+import org.edgefield.field.job.Surroundings;
+
+/** Makes the {@link PermittedField} that a case asks for. */
+public final class PermittedFields {
+  private PermittedFields() {}
+
+  /**
+   * The permitted field of a case.
+   *
+   * @throws GasException where the criterion does not hold for the gas or its state
+   */
+  public static PermittedField of(Permitted permitted, Surroundings surroundings) {
+    double share = 1 / permitted.margin();
+    switch (permitted.criterion()) {
+      case FIXED:
+        double fixed = permitted.field_V_per_m() * share;
+        return (k1, k2) -> fixed;
+      case PEEK:
+        if (!surroundings.gas().equalsIgnoreCase("air")) {
+          throw new GasException(
+              "Peek's law holds for air, not for "
+                  + surroundings.gas()
+                  + ": give a fixed permitted field");
+        }
+        double delta = AirDensity.peek(surroundings.pressure_Pa(), surroundings.temperature_K());
+        double roughness = permitted.roughness();
+        return (k1, k2) -> PeekLaw.surface_V_per_m(k1, k2, delta, roughness) * share;
+      case STREAMER:
+        throw new GasException(
+            "the streamer criterion is not available in a screen: use fixed or peek");
+    }
+    throw new IllegalArgumentException("criterion " + permitted.criterion());
+  }
+}

@@ -1,0 +1,2 @@
+/** What the gas withstands. */
+package org.edgefield.field.gas;

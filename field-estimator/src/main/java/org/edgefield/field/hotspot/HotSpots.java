@@ -1,0 +1,169 @@
+package org.edgefield.field.hotspot;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import org.edgefield.curvature.EdgeClass;
+import org.edgefield.curvature.Features;
+import org.edgefield.curvature.SurfaceNodes;
+import org.edgefield.field.gas.PermittedField;
+import org.edgefield.field.result.DutyField;
+import org.edgefield.field.result.DutyResult;
+import org.edgefield.field.result.HotSpot;
+import org.edgefield.field.result.Law;
+import org.edgefield.importer.brep.Assembly;
+import org.edgefield.importer.mesh.SurfaceMesh;
+
+/** Finds, ranks and explains the hot spots of a duty; serves the estimate and the solve alike. */
+public final class HotSpots {
+  /** Share of the peak that bounds the region shown where nothing is amber. */
+  private static final double CALM_SHARE = 0.95;
+
+  private final Assembly assembly;
+  private final SurfaceMesh mesh;
+  private final SurfaceNodes nodes;
+  private final Features features;
+  private final LocalLaw model;
+  private final PermittedField permitted;
+  private final double amber;
+  private final Regions regions;
+  private final int[] nodePart;
+  private final double[] nodeArea;
+
+  /**
+   * Prepares for any number of duties.
+   *
+   * @param amber utilisation from which a region counts
+   */
+  public HotSpots(
+      Assembly assembly,
+      SurfaceMesh mesh,
+      SurfaceNodes nodes,
+      Features features,
+      LocalLaw model,
+      PermittedField permitted,
+      double amber) {
+    this.assembly = assembly;
+    this.mesh = mesh;
+    this.nodes = nodes;
+    this.features = features;
+    this.model = model;
+    this.permitted = permitted;
+    this.amber = amber;
+    regions = new Regions(mesh, nodes, features, assembly.geometry().faceCount());
+    nodePart = new int[nodes.count()];
+    nodeArea = new double[nodes.count()];
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      double third = area(t) / 3;
+      int part = assembly.geometry().facePart(mesh.triangleFace()[t]);
+      for (int c = 0; c < 3; c++) {
+        int n = nodes.cornerNode()[3 * t + c];
+        nodePart[n] = part;
+        nodeArea[n] += third;
+      }
+    }
+  }
+
+  private double area(int t) {
+    double[] e = new double[6];
+    for (int k = 0; k < 3; k++) {
+      double a = mesh.xyz()[3 * mesh.triangles()[3 * t] + k];
+      e[k] = mesh.xyz()[3 * mesh.triangles()[3 * t + 1] + k] - a;
+      e[3 + k] = mesh.xyz()[3 * mesh.triangles()[3 * t + 2] + k] - a;
+    }
+    double x = e[1] * e[5] - e[2] * e[4];
+    double y = e[2] * e[3] - e[0] * e[5];
+    double z = e[0] * e[4] - e[1] * e[3];
+    return 0.5 * Math.sqrt(x * x + y * y + z * z);
+  }
+
+  /**
+   * The outcome of one duty.
+   *
+   * @param duty index in the case
+   * @param field its values on the nodes
+   */
+  public DutyResult of(int duty, DutyField field) {
+    double[] utilisation = new double[nodes.count()];
+    int peak = 0;
+    for (int n = 0; n < utilisation.length; n++) {
+      utilisation[n] = field.field_V_per_m()[n] / field.permitted_V_per_m()[n];
+      if (utilisation[n] > utilisation[peak]) {
+        peak = n;
+      }
+    }
+    List<HotSpot> spots = new ArrayList<>();
+    for (int[] region : regions.above(utilisation, amber)) {
+      spots.add(describe(duty, spots.size() + 1, region, field, utilisation));
+    }
+    HotSpot highest;
+    if (!spots.isEmpty()) {
+      highest = spots.get(0);
+    } else {
+      double limit = Math.max(CALM_SHARE * utilisation[peak], Double.MIN_NORMAL);
+      List<int[]> calm = regions.above(utilisation, limit);
+      int[] region = calm.isEmpty() ? new int[] {peak} : calm.get(0);
+      highest = describe(duty, 1, region, field, utilisation);
+    }
+    return new DutyResult(field, highest, List.copyOf(spots));
+  }
+
+  private HotSpot describe(int duty, int id, int[] region, DutyField field, double[] utilisation) {
+    int p = region[0];
+    for (int n : region) {
+      if (utilisation[n] > utilisation[p]) {
+        p = n;
+      }
+    }
+    int v = nodes.nodeVertex()[p];
+    boolean line = regions.isLine(p);
+    double areaSum = 0;
+    for (int n : region) {
+      areaSum += nodeArea[n];
+    }
+    double gap = model.gap_m(duty, p);
+    return new HotSpot(
+        id,
+        nodePart[p],
+        regions.name(p),
+        Arrays.copyOfRange(mesh.xyz(), 3 * v, 3 * v + 3),
+        field.field_V_per_m()[p],
+        field.permitted_V_per_m()[p],
+        utilisation[p],
+        field.uncertainty()[p],
+        line ? Double.NaN : areaSum,
+        line ? length(region) : Double.NaN,
+        field.radius_m()[p],
+        gap,
+        model.opposingPart(duty, p),
+        Law.values()[field.law()[p]],
+        region,
+        new Cures(model, permitted).of(duty, p, utilisation[p], field.radius_m()[p]));
+  }
+
+  /** Length of the sharp edges in a region: half of each segment per end inside. */
+  private double length(int[] region) {
+    boolean[] inside = new boolean[mesh.vertexCount()];
+    for (int n : region) {
+      inside[nodes.nodeVertex()[n]] = true;
+    }
+    double sum = 0;
+    for (int g = 0; g < mesh.segmentCount(); g++) {
+      if (features.edge(mesh.segmentEdge()[g]).edgeClass() != EdgeClass.SHARP_CONVEX) {
+        continue;
+      }
+      int a = mesh.segmentVertices()[2 * g];
+      int b = mesh.segmentVertices()[2 * g + 1];
+      double ends = (inside[a] ? 0.5 : 0) + (inside[b] ? 0.5 : 0);
+      if (ends > 0) {
+        double d2 = 0;
+        for (int k = 0; k < 3; k++) {
+          double d = mesh.xyz()[3 * a + k] - mesh.xyz()[3 * b + k];
+          d2 += d * d;
+        }
+        sum += ends * Math.sqrt(d2);
+      }
+    }
+    return sum;
+  }
+}
