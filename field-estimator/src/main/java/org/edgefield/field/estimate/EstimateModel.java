@@ -256,14 +256,27 @@ public final class EstimateModel implements LocalLaw {
       nodeLimit[i] = limit[s];
       nodeGap[i] = gap[s];
       nodeRadius[i] = sites.radius(s);
-      nodeLaw[i] = sites.law[s];
-      uncertainty[i] = UNCERTAINTY[sites.law[s]];
+      nodeLaw[i] = code(sites.law[s]);
+      uncertainty[i] = uncertainty(sites.law[s]);
     }
     return new DutyField(d.name(), nodeField, nodeLimit, nodeGap, nodeRadius, nodeLaw, uncertainty);
   }
 
+  /** The form in which {@link DutyField#law} keeps a law. */
+  @SuppressWarnings("EnumOrdinal")
+  private static byte code(Law law) {
+    return (byte) law.ordinal();
+  }
+
   /** Relative uncertainty per law, from the comparisons with closed forms in the tests. */
-  private static final double[] UNCERTAINTY = {0.3, 0.4, 0.4, 0.5, 0};
+  private static double uncertainty(Law law) {
+    return switch (law) {
+      case PARALLEL_SURFACES -> 0.3;
+      case ROUNDED_WEDGE, EDGE_AS_MADE -> 0.4;
+      case CORNER_AS_MADE -> 0.5;
+      case SOLVED -> throw new IllegalStateException("an estimate solves nothing");
+    };
+  }
 
   private double nearest(int s) {
     double gap = Double.POSITIVE_INFINITY;
@@ -399,8 +412,7 @@ public final class EstimateModel implements LocalLaw {
     }
     boolean thick = false;
     for (int s = 0; s < sites.count(); s++) {
-      thick |=
-          sites.law[s] == Law.EDGE_AS_MADE.ordinal() && sites.radius(s) > 0.1 * sites.thickness[s];
+      thick |= sites.law[s] == Law.EDGE_AS_MADE && sites.radius(s) > 0.1 * sites.thickness[s];
     }
     if (thick) {
       warnings.add(

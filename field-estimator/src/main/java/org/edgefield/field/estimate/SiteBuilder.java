@@ -85,7 +85,7 @@ final class SiteBuilder {
         System.arraycopy(mesh.xyz(), 3 * v, sites.position, 3 * s, 3);
         sites.k1[s] = nodes.k1()[n];
         sites.k2[s] = nodes.k2()[n];
-        sites.law[s] = (byte) Law.PARALLEL_SURFACES.ordinal();
+        sites.law[s] = Law.PARALLEL_SURFACES;
       }
       for (int c = 0; c < 3; c++) {
         sites.normal[3 * s + c] += nodes.normal()[3 * n + c];
@@ -231,7 +231,7 @@ final class SiteBuilder {
     for (int s = 0; s < sites.count(); s++) {
       int f = nodeFace[sites.node[s]];
       RoundedEdge r = rounded[f];
-      if (r == null || sites.k1[s] <= 0 && sites.k2[s] < 0) {
+      if (r == null || sites.k1[s] <= 0) {
         continue;
       }
       double radius = r.radius_m();
@@ -246,7 +246,7 @@ final class SiteBuilder {
       double k2 = sites.k2[s];
       double along = Math.abs(k2 - across) < Math.abs(k1 - across) ? Math.min(k1, across) : k2;
       sites.form[s] = Sites.EDGE;
-      sites.law[s] = (byte) Law.ROUNDED_WEDGE.ordinal();
+      sites.law[s] = Law.ROUNDED_WEDGE;
       sites.wedge[s] = wedge;
       sites.thickness[s] = t;
       sites.width[s] = w;
@@ -315,7 +315,7 @@ final class SiteBuilder {
       double[] d = Arrays.copyOfRange(tangent, 3 * v, 3 * v + 3);
       double half = halfExtent(part, d);
       sites.form[s] = corner ? Sites.CORNER : Sites.EDGE;
-      sites.law[s] = (byte) (corner ? Law.CORNER_AS_MADE.ordinal() : Law.EDGE_AS_MADE.ordinal());
+      sites.law[s] = corner ? Law.CORNER_AS_MADE : Law.EDGE_AS_MADE;
       sites.wedge[s] = RoundedWedge.ofInteriorAngle(Math.max(0, sharpest[v]));
       sites.k1[s] = 1 / radius;
       sites.k2[s] = corner ? 1 / radius : patches[s] > 1 && sum > 0.1 ? along[s] / sum : 0;

@@ -32,8 +32,8 @@ final class Sites {
   final int[] part;
   final byte[] form;
 
-  /** Ordinal of {@link Law}: edges as made, corners as made; else parallel surfaces. */
-  final byte[] law;
+  /** Which law gives the value. */
+  final Law[] law;
 
   final double[] k1;
   final double[] k2;
@@ -58,7 +58,7 @@ final class Sites {
     normal = new double[3 * count];
     part = new int[count];
     form = new byte[count];
-    law = new byte[count];
+    law = new Law[count];
     k1 = new double[count];
     k2 = new double[count];
     c1 = new double[count];

@@ -14,11 +14,12 @@ public final class PermittedFields {
    */
   public static PermittedField of(Permitted permitted, Surroundings surroundings) {
     double share = 1 / permitted.margin();
-    switch (permitted.criterion()) {
-      case FIXED:
+    return switch (permitted.criterion()) {
+      case FIXED -> {
         double fixed = permitted.field_V_per_m() * share;
-        return (k1, k2) -> fixed;
-      case PEEK:
+        yield (k1, k2) -> fixed;
+      }
+      case PEEK -> {
         if (!surroundings.gas().equalsIgnoreCase("air")) {
           throw new GasException(
               "Peek's law holds for air, not for "
@@ -27,11 +28,11 @@ public final class PermittedFields {
         }
         double delta = AirDensity.peek(surroundings.pressure_Pa(), surroundings.temperature_K());
         double roughness = permitted.roughness();
-        return (k1, k2) -> PeekLaw.surface_V_per_m(k1, k2, delta, roughness) * share;
-      case STREAMER:
-        throw new GasException(
-            "the streamer criterion is not available in a screen: use fixed or peek");
-    }
-    throw new IllegalArgumentException("criterion " + permitted.criterion());
+        yield (k1, k2) -> PeekLaw.surface_V_per_m(k1, k2, delta, roughness) * share;
+      }
+      case STREAMER ->
+          throw new GasException(
+              "the streamer criterion is not available in a screen: use fixed or peek");
+    };
   }
 }

@@ -19,7 +19,6 @@ public final class HotSpots {
   /** Share of the peak that bounds the region shown where nothing is amber. */
   private static final double CALM_SHARE = 0.95;
 
-  private final Assembly assembly;
   private final SurfaceMesh mesh;
   private final SurfaceNodes nodes;
   private final Features features;
@@ -43,7 +42,6 @@ public final class HotSpots {
       LocalLaw model,
       PermittedField permitted,
       double amber) {
-    this.assembly = assembly;
     this.mesh = mesh;
     this.nodes = nodes;
     this.features = features;
@@ -136,9 +134,14 @@ public final class HotSpots {
         field.radius_m()[p],
         gap,
         model.opposingPart(duty, p),
-        Law.values()[field.law()[p]],
+        lawOf(field.law()[p]),
         region,
         new Cures(model, permitted).of(duty, p, utilisation[p], field.radius_m()[p]));
+  }
+
+  @SuppressWarnings("EnumOrdinal")
+  private static Law lawOf(byte code) {
+    return Law.values()[code];
   }
 
   /** Length of the sharp edges in a region: half of each segment per end inside. */
