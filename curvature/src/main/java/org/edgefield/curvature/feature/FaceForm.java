@@ -6,19 +6,22 @@ package org.edgefield.curvature.feature;
  *
  * @param form kind of form
  * @param convex whether the leading curvature is convex towards the gas
- * @param radius_m radius of a cylinder, a sphere or a round section; for a free form the smallest
- *     convex radius found, infinite where none; NaN otherwise
+ * @param radius_m radius of a cylinder, a sphere or a round section, NaN otherwise
+ * @param tightest_m smallest convex radius found on the face, infinite where none is convex
  * @param halfAngle_rad half-angle of a cone, NaN otherwise
  */
-record FaceForm(Kind form, boolean convex, double radius_m, double halfAngle_rad) {
+record FaceForm(
+    Kind form, boolean convex, double radius_m, double tightest_m, double halfAngle_rad) {
   /** Kinds of form. */
   enum Kind {
     FLAT,
     CYLINDER,
     CONE,
     SPHERE,
-    /** One principal curvature constant, the other not: torus, bent rod. */
+    /** The larger principal curvature is constant, the other not: torus, bent rod. */
     ROUND_SECTION,
+    /** The smaller principal curvature is constant, the other not: barrel, lens. */
+    DOME,
     FREE
   }
 }

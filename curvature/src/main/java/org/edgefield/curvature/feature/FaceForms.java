@@ -24,6 +24,9 @@ final class FaceForms {
   /** Angle between all normals of a face below which it counts as flat. */
   private static final double FLAT_RAD = Math.toRadians(0.05);
 
+  private static final FaceForm FLAT =
+      new FaceForm(FaceForm.Kind.FLAT, true, Double.NaN, Double.POSITIVE_INFINITY, Double.NaN);
+
   private final ExactGeometry geometry;
   private final SurfaceMesh mesh;
   private final int[] faceStart;
@@ -60,7 +63,7 @@ final class FaceForms {
     int n = geometry.faceCount();
     int[] most = new int[n];
     Arrays.fill(most, TRIANGLES);
-    sample(most);
+    sample(most, 0.1);
     FaceForm[] forms = new FaceForm[n];
     Arrays.fill(most, 0);
     boolean anyFree = false;
@@ -72,7 +75,7 @@ final class FaceForms {
       }
     }
     if (anyFree) {
-      sample(most);
+      sample(most, 0);
       for (int f = 0; f < n; f++) {
         if (most[f] > 0) {
           forms[f] = free(f);
@@ -82,8 +85,12 @@ final class FaceForms {
     return forms;
   }
 
-  /** Evaluates three points in up to so many triangles of each face, spread over the face. */
-  private void sample(int[] most) {
+  /**
+   * Evaluates three points in up to so many triangles of each face, spread over the face.
+   *
+   * @param inset 0 for the corners themselves, more to keep away from poles and apexes
+   */
+  private void sample(int[] most, double inset) {
     int n = most.length;
     start = new int[n + 1];
     for (int f = 0; f < n; f++) {
@@ -100,11 +107,10 @@ final class FaceForms {
         for (int k = 0; k < 3; k++) {
           int p = start[f] + 3 * i + k;
           face[p] = f;
-          // Near each corner, yet never at a pole or an apex.
           for (int c = 0; c < 2; c++) {
             double[] w = mesh.cornerUv();
             double sum = w[6 * t + c] + w[6 * t + 2 + c] + w[6 * t + 4 + c];
-            uv[2 * p + c] = 0.1 * sum + 0.7 * w[6 * t + 2 * k + c];
+            uv[2 * p + c] = inset * sum + (1 - 3 * inset) * w[6 * t + 2 * k + c];
           }
         }
       }
@@ -117,7 +123,7 @@ final class FaceForms {
     int from = start[f];
     int to = start[f + 1];
     if (from == to) {
-      return new FaceForm(FaceForm.Kind.FLAT, true, Double.NaN, Double.NaN);
+      return FLAT;
     }
     SurfaceKind kind = geometry.faceKind(f);
     double[] one = range(from, to, 3);
@@ -125,43 +131,43 @@ final class FaceForms {
     double mean1 = 0.5 * (one[0] + one[1]);
     double mean2 = 0.5 * (two[0] + two[1]);
     if (kind == SurfaceKind.PLANE || normalSpread(from, to) < FLAT_RAD) {
-      return new FaceForm(FaceForm.Kind.FLAT, true, Double.NaN, Double.NaN);
+      return FLAT;
     }
+    double tightest = one[1] > 0 ? 1 / one[1] : Double.POSITIVE_INFINITY;
     boolean analytic = kind != SurfaceKind.NURBS && kind != SurfaceKind.OTHER;
     double scale = Math.max(Math.abs(mean1), Math.abs(mean2));
     boolean constant1 = one[1] - one[0] <= CONSTANT * Math.abs(mean1);
     boolean constant2 = two[1] - two[0] <= CONSTANT * Math.abs(mean2);
     if (kind == SurfaceKind.SPHERE
         || (!analytic && constant1 && constant2 && mean1 - mean2 <= CONSTANT * scale)) {
-      return round(FaceForm.Kind.SPHERE, 0.5 * (mean1 + mean2));
+      return round(FaceForm.Kind.SPHERE, 0.5 * (mean1 + mean2), tightest);
     }
     boolean zero1 = Math.max(Math.abs(one[0]), Math.abs(one[1])) <= CONSTANT * scale;
     boolean zero2 = Math.max(Math.abs(two[0]), Math.abs(two[1])) <= CONSTANT * scale;
     if (kind == SurfaceKind.CYLINDER
         || (!analytic && ((constant1 && zero2) || (constant2 && zero1)))) {
-      return round(FaceForm.Kind.CYLINDER, Math.abs(mean1) > Math.abs(mean2) ? mean1 : mean2);
+      double k = Math.abs(mean1) > Math.abs(mean2) ? mean1 : mean2;
+      return round(FaceForm.Kind.CYLINDER, k, tightest);
     }
     if (kind == SurfaceKind.CONE || (!analytic && (zero1 || zero2))) {
       double halfAngle = coneHalfAngle(from, to);
       if (kind == SurfaceKind.CONE || halfAngle > 0) {
         return new FaceForm(
-            FaceForm.Kind.CONE, mean1 > Math.abs(mean2), Double.NaN, Math.abs(halfAngle));
+            FaceForm.Kind.CONE, mean1 > Math.abs(mean2), Double.NaN, tightest, Math.abs(halfAngle));
       }
     }
-    if (kind == SurfaceKind.TORUS) {
+    if (kind == SurfaceKind.TORUS || constant1 || constant2) {
       // The section's curvature is the steadier one.
       boolean first = (one[1] - one[0]) * Math.abs(mean2) <= (two[1] - two[0]) * Math.abs(mean1);
-      return round(FaceForm.Kind.ROUND_SECTION, first ? mean1 : mean2);
-    }
-    if (constant1 || constant2) {
-      boolean first = constant1 && !(constant2 && Math.abs(mean2) > Math.abs(mean1));
-      return round(FaceForm.Kind.ROUND_SECTION, first ? mean1 : mean2);
+      double k = first ? mean1 : mean2;
+      boolean leads = Math.abs(k) >= 0.999 * scale;
+      return round(leads ? FaceForm.Kind.ROUND_SECTION : FaceForm.Kind.DOME, k, tightest);
     }
     return free(f);
   }
 
-  private static FaceForm round(FaceForm.Kind kind, double curvature) {
-    return new FaceForm(kind, curvature > 0, Math.abs(1 / curvature), Double.NaN);
+  private static FaceForm round(FaceForm.Kind kind, double curvature, double tightest) {
+    return new FaceForm(kind, curvature > 0, Math.abs(1 / curvature), tightest, Double.NaN);
   }
 
   private FaceForm free(int f) {
@@ -169,7 +175,7 @@ final class FaceForms {
     for (int p = start[f]; p < start[f + 1]; p++) {
       most = Math.max(most, values[STRIDE * p + 3]);
     }
-    return new FaceForm(FaceForm.Kind.FREE, most > 0, 1 / most, Double.NaN);
+    return new FaceForm(FaceForm.Kind.FREE, most > 0, Double.NaN, 1 / most, Double.NaN);
   }
 
   private double[] range(int from, int to, int component) {

@@ -20,6 +20,9 @@ public final class FeatureRecogniser implements Features {
   /** Share of a turn that a hollow cylinder must close to count as a bore. */
   private static final double BORE_RAD = Math.toRadians(240);
 
+  /** How far a cylinder may go round beyond the sides of a fillet. */
+  private static final double BEYOND_RAD = Math.toRadians(30);
+
   /** Name of a pointed tip. */
   static final String TIP = "cone tip";
 
@@ -31,6 +34,7 @@ public final class FeatureRecogniser implements Features {
   private final FaceForm[] forms;
   private final Fillet[] fillets;
   private final double[] coverage;
+  private final double[] area;
 
   /** Edges per CAD vertex, in compressed rows. */
   private final int[] vertexStart;
@@ -60,6 +64,13 @@ public final class FeatureRecogniser implements Features {
     forms = FaceForms.find(geometry, mesh);
     fillets = FilletFinder.find(geometry, samples, left, group, forms);
     coverage = NormalCoverage.find(geometry, mesh, group, forms);
+    area = GroupAreas.find(mesh, group);
+    for (int g = 0; g < fillets.length; g++) {
+      // A boss that runs into ribs has tangent sides too, yet goes round far beyond them.
+      if (fillets[g] != null && coverage[g] > fillets[g].turning_rad() + BEYOND_RAD) {
+        fillets[g] = null;
+      }
+    }
     allTangent = new boolean[geometry.faceCount()];
     neighbours = new int[geometry.faceCount()];
     surround();
@@ -161,7 +172,7 @@ public final class FeatureRecogniser implements Features {
     Fillet f = fillets[group[face]];
     return f == null || !f.isLong()
         ? null
-        : new RoundedEdge(face, f.smallest_m(), f.turning_rad(), f.convex());
+        : new RoundedEdge(face, f.radius_m(), f.turning_rad(), f.convex());
   }
 
   @Override
@@ -183,7 +194,11 @@ public final class FeatureRecogniser implements Features {
         if (blended) {
           yield (form.convex() ? "rounded corner " : "inside corner ") + radius;
         }
-        boolean cap = allTangent[group[face]] && neighbours[group[face]] > 0;
+        // No more than half a sphere that runs into its neighbour smoothly.
+        boolean cap =
+            allTangent[group[face]]
+                && neighbours[group[face]] > 0
+                && area[group[face]] < 2.2 * Math.PI * form.radius_m() * form.radius_m();
         yield form.convex()
             ? (cap ? "rounded end " : "sphere ") + radius
             : "hollow sphere " + radius;
@@ -195,6 +210,7 @@ public final class FeatureRecogniser implements Features {
                       : "round section ")
                   + radius
               : "groove " + radius;
+      case DOME -> (form.convex() ? "domed face " : "hollow face ") + radius;
       case CONE ->
           String.format(
               java.util.Locale.ROOT,
@@ -203,25 +219,21 @@ public final class FeatureRecogniser implements Features {
               degrees(form.halfAngle_rad()));
       case FREE -> {
         String name = blended && form.convex() ? "rounded corner" : "free-form face";
-        yield form.convex() ? name + ", down to " + radius : name;
+        yield form.convex() ? name + ", down to " + Millimetres.radius(form.tightest_m()) : name;
       }
     };
   }
 
   private static String filletName(Fillet f) {
-    String small = Millimetres.radius(f.smallest_m());
-    String large = Millimetres.radius(f.largest_m());
-    boolean varies = f.largest_m() > 1.05 * f.smallest_m();
-    String radius = varies ? small + " to " + large : meanRadius(f);
+    String radius =
+        f.varies()
+            ? Millimetres.radius(f.smallest_m()) + " to " + Millimetres.radius(f.largest_m())
+            : Millimetres.radius(f.median_m());
     boolean end = !f.isLong() && f.turning_rad() > END_TURN;
     if (f.convex()) {
       return (f.isLong() ? "rounded edge " : end ? "rounded end " : "rounded corner ") + radius;
     }
     return (f.turning_rad() > END_TURN ? "slot end " : "inside fillet ") + radius;
-  }
-
-  private static String meanRadius(Fillet f) {
-    return Millimetres.radius(0.5 * (f.smallest_m() + f.largest_m()));
   }
 
   @Override
@@ -252,10 +264,23 @@ public final class FeatureRecogniser implements Features {
     return Long.toString(Math.round(Math.toDegrees(rad)));
   }
 
-  /** Of the two faces at a smooth edge, the one that curves more towards the gas. */
+  /**
+   * Of the two faces at a smooth edge, the one that curves more towards the gas; where none does,
+   * the curved one.
+   */
   private int tighterFace(int edge) {
     int[] faces = geometry.edgeFaces(edge);
-    return tightness(faces[1]) > tightness(faces[0]) ? faces[1] : faces[0];
+    return leads(faces[1], faces[0]) ? faces[1] : faces[0];
+  }
+
+  private boolean leads(int face, int other) {
+    double a = tightness(face);
+    double b = tightness(other);
+    return a > b || (a == b && flat(other) && !flat(face));
+  }
+
+  private boolean flat(int face) {
+    return forms[face].form() == FaceForm.Kind.FLAT;
   }
 
   /** Largest convex curvature that a face is known for, 0 where it has none. */
@@ -264,8 +289,7 @@ public final class FeatureRecogniser implements Features {
     if (fillet != null) {
       return fillet.convex() ? 1 / fillet.smallest_m() : 0;
     }
-    FaceForm form = forms[face];
-    return form.convex() && form.radius_m() > 0 ? 1 / form.radius_m() : 0;
+    return 1 / forms[face].tightest_m();
   }
 
   @Override
@@ -276,6 +300,7 @@ public final class FeatureRecogniser implements Features {
     }
     int sharpest = -1;
     int tightest = -1;
+    int concave = 0;
     for (int i = vertexStart[cadVertex]; i < vertexStart[cadVertex + 1]; i++) {
       int e = vertexEdges[i];
       if (edges[e].edgeClass() == EdgeClass.DEGENERATE) {
@@ -285,18 +310,24 @@ public final class FeatureRecogniser implements Features {
           return TIP;
         }
       }
+      if (edges[e].edgeClass() == EdgeClass.SHARP_CONCAVE) {
+        concave++;
+      }
       if (sharpAt(e, cadVertex)
           && (sharpest < 0 || edges[e].sharpest_rad() < edges[sharpest].sharpest_rad())) {
         sharpest = e;
       }
       for (int face : geometry.edgeFaces(e)) {
-        if (face >= 0 && (tightest < 0 || tightness(face) > tightness(tightest))) {
+        if (face >= 0 && (tightest < 0 || leads(face, tightest))) {
           tightest = face;
         }
       }
     }
     if (sharpest >= 0) {
       return edgeName(sharpest);
+    }
+    if (concave >= 3) {
+      return "inside corner of " + concave + " edges";
     }
     return tightest >= 0 ? faceName(tightest) : "point";
   }

@@ -292,18 +292,22 @@ final class FilletFinder {
     if (sections.isEmpty() || matched < 0.5 * length) {
       return null;
     }
-    double smallest = Double.POSITIVE_INFINITY;
-    double largest = 0;
+    double[] radius = new double[sections.size()];
     double[] turn = new double[sections.size()];
     for (int i = 0; i < turn.length; i++) {
       double[] s = sections.get(i);
-      double r = 0.5 * Math.abs(s[0] + s[1]);
-      smallest = Math.min(smallest, r);
-      largest = Math.max(largest, r);
+      radius[i] = 0.5 * Math.abs(s[0] + s[1]);
       turn[i] = s[2];
     }
+    Arrays.sort(radius);
     Arrays.sort(turn);
+    int last = turn.length - 1;
     return new Fillet(
-        smallest, largest, turn[turn.length / 2], 0.5 * matched, sections.get(0)[0] > 0);
+        radius[0],
+        radius[last],
+        radius[turn.length / 2],
+        turn[turn.length / 2],
+        0.5 * matched,
+        sections.get(0)[0] > 0);
   }
 }

@@ -37,7 +37,7 @@ final class NormalCoverage {
       if (frame[g] == null) {
         frame[g] = frame(geometry, face, mesh.cornerUv(), 6 * t);
       }
-      double[] c = normal(mesh, t);
+      double[] c = Triangles.normal(mesh, t);
       double[] f = frame[g];
       angle[fill[g]++] =
           Math.atan2(
@@ -63,21 +63,5 @@ final class NormalCoverage {
     geometry.curvature(1, new int[] {face}, new double[] {uv[at], uv[at + 1]}, c);
     int d = Math.abs(c[3]) > Math.abs(c[4]) ? 5 : 8;
     return new double[] {c[0], c[1], c[2], c[d], c[d + 1], c[d + 2]};
-  }
-
-  private static double[] normal(SurfaceMesh mesh, int t) {
-    double[] x = mesh.xyz();
-    int o = 3 * mesh.triangles()[3 * t];
-    int p = 3 * mesh.triangles()[3 * t + 1];
-    int q = 3 * mesh.triangles()[3 * t + 2];
-    double[] a = new double[3];
-    double[] b = new double[3];
-    for (int k = 0; k < 3; k++) {
-      a[k] = x[p + k] - x[o + k];
-      b[k] = x[q + k] - x[o + k];
-    }
-    return new double[] {
-      a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]
-    };
   }
 }

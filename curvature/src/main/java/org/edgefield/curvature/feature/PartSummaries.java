@@ -106,23 +106,36 @@ public final class PartSummaries {
     };
   }
 
+  /** Lengths along the exact curves: Simpson's rule on the speed within each segment. */
   private void lengths(ExactGeometry geometry, SurfaceMesh mesh, Features features) {
-    double[] x = mesh.xyz();
+    int n = 0;
+    int[] edge = new int[3 * mesh.segmentCount()];
+    double[] t = new double[3 * mesh.segmentCount()];
     for (int s = 0; s < mesh.segmentCount(); s++) {
       EdgeFeature f = features.edge(mesh.segmentEdge()[s]);
-      double t = 0.5 * (mesh.segmentT()[2 * s] + mesh.segmentT()[2 * s + 1]);
-      if (!sharpSomewhere(f) || f.interiorAngle_rad(t) >= Math.PI - EdgeFeature.TANGENT_RAD) {
-        continue;
+      double t0 = mesh.segmentT()[2 * s];
+      double t1 = mesh.segmentT()[2 * s + 1];
+      double middle = 0.5 * (t0 + t1);
+      if (sharpSomewhere(f) && f.interiorAngle_rad(middle) < Math.PI - EdgeFeature.TANGENT_RAD) {
+        for (double at : new double[] {t0, middle, t1}) {
+          edge[n] = f.edge();
+          t[n++] = at;
+        }
       }
-      int a = 3 * mesh.segmentVertices()[2 * s];
-      int b = 3 * mesh.segmentVertices()[2 * s + 1];
-      double dx = x[b] - x[a];
-      double dy = x[b + 1] - x[a + 1];
-      double dz = x[b + 2] - x[a + 2];
-      int[] faces = geometry.edgeFaces(f.edge());
-      sharpLength[geometry.facePart(Math.max(faces[0], faces[1]))] +=
-          Math.sqrt(dx * dx + dy * dy + dz * dz);
     }
+    double[] x = new double[6 * n];
+    geometry.curve(n, edge, t, x);
+    for (int i = 0; i < n; i += 3) {
+      double mean = (speed(x, i) + 4 * speed(x, i + 1) + speed(x, i + 2)) / 6;
+      int[] faces = geometry.edgeFaces(edge[i]);
+      sharpLength[geometry.facePart(Math.max(faces[0], faces[1]))] +=
+          mean * Math.abs(t[i + 2] - t[i]);
+    }
+  }
+
+  private static double speed(double[] x, int i) {
+    int a = 6 * i + 3;
+    return Math.sqrt(x[a] * x[a] + x[a + 1] * x[a + 1] + x[a + 2] * x[a + 2]);
   }
 
   private void radii(ExactGeometry geometry, SurfaceMesh mesh, SurfaceNodes nodes) {

@@ -47,9 +47,9 @@ class PartSummariesTest {
   void aStudCountsItsOuterRimsAndNotItsFoot() {
     PartSummary s = of(Revolved.stud(0.002, 0.0005, SurfaceKind.TORUS));
     assertThat(s.sharpConvexEdges()).isEqualTo(3);
-    // Two rims of the plate (R20) and one of the stud (R2), by chords of 96 columns.
+    // Two rims of the plate (R20) and one of the stud (R2), along the exact circles.
     double length = 2 * Math.PI * (0.02 + 0.02 + 0.002);
-    assertThat(s.sharpConvexLength_m()).isCloseTo(length, within(2e-4 * length));
+    assertThat(s.sharpConvexLength_m()).isCloseTo(length, within(1e-12 * length));
     assertThat(s.sharpest_rad()).isCloseTo(Math.PI / 2, within(1e-9));
     assertThat(s.smallestConvexRadius_m()).isCloseTo(0.002, within(1e-12));
     assertThat(s.corners()).isZero();
