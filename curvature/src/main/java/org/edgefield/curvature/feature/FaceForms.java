@@ -145,7 +145,9 @@ final class FaceForms {
     boolean zero1 = Math.max(Math.abs(one[0]), Math.abs(one[1])) <= CONSTANT * scale;
     boolean zero2 = Math.max(Math.abs(two[0]), Math.abs(two[1])) <= CONSTANT * scale;
     if (kind == SurfaceKind.CYLINDER
-        || (!analytic && ((constant1 && zero2) || (constant2 && zero1)))) {
+        || (!analytic
+            && ((constant1 && zero2 && acrossAxis(from, to, 8))
+                || (constant2 && zero1 && acrossAxis(from, to, 5))))) {
       double k = Math.abs(mean1) > Math.abs(mean2) ? mean1 : mean2;
       return round(FaceForm.Kind.CYLINDER, k, tightest);
     }
@@ -204,6 +206,25 @@ final class FaceForms {
       dot += values[STRIDE * p + k] * values[STRIDE * q + k];
     }
     return Math.atan2(Math.sqrt(c[0] * c[0] + c[1] * c[1] + c[2] * c[2]), dot);
+  }
+
+  /**
+   * Whether all normals are across one axis: the first point's direction of no curvature. A thin
+   * ring has as small a second curvature as a cylinder, but its normals go round.
+   *
+   * @param direction offset of that direction in a point's values
+   */
+  private boolean acrossAxis(int from, int to, int direction) {
+    for (int p = from; p < to; p++) {
+      double along = 0;
+      for (int k = 0; k < 3; k++) {
+        along += values[STRIDE * p + k] * values[STRIDE * from + direction + k];
+      }
+      if (Math.abs(along) > CONSTANT) {
+        return false;
+      }
+    }
+    return true;
   }
 
   /** Cross product of two normals, or of their differences to a third. */
