@@ -83,8 +83,8 @@ final class AmbientField {
     double k1 = Math.max(sites.k1[s], 0);
     double k2 = Math.max(sites.k2[s], 0);
     // Flat directions are as long as the body; c = 1/b^2.
-    double c1 = Math.max(k1 / height, sites.form[s] == Sites.SMOOTH ? sites.c1[s] : 0);
-    double c2 = Math.max(k2 / height, sites.c2[s]);
+    double c1 = Math.max(k1 / height, sites.form[s] == Sites.SMOOTH ? sites.end1[s] : 0);
+    double c2 = Math.max(k2 / height, sites.end2[s]);
     double gamma = EllipsoidInField.concentration(height, 1 / Math.sqrt(c1), 1 / Math.sqrt(c2));
     double edge = 1;
     if (sites.form[s] != Sites.SMOOTH) {

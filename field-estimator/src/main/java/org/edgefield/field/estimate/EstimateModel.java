@@ -183,7 +183,7 @@ public final class EstimateModel implements LocalLaw {
     for (int c = 0; c < 3; c++) {
       dot += sites.normal[3 * s + c] * sites.normal[3 * far + c];
     }
-    if (dot > -FACING || gap * gap * Math.max(endTerm(s, true), endTerm(s, false)) > ENDS) {
+    if (dot > -FACING || gap * gap * ends(s) > ENDS) {
       return false;
     }
     double a = ParallelSurfacesLaw.held(sites.k1[s], gap);
@@ -193,10 +193,13 @@ public final class EstimateModel implements LocalLaw {
     return misfit * gap < MISFIT;
   }
 
-  private double endTerm(int s, boolean first) {
-    double k = first ? sites.k1[s] : sites.k2[s];
-    double c = first ? sites.c1[s] : sites.c2[s];
-    return k < 0 ? 0 : Math.max(0, c - k * k);
+  /** Larger of the end terms of directions in which the body does not close on itself. */
+  private double ends(int s) {
+    double k1 = sites.k1[s];
+    double k2 = sites.k2[s];
+    double e1 = k1 * k1 < 0.5 * sites.end1[s] ? sites.end1[s] : 0;
+    double e2 = k2 * k2 < 0.5 * sites.end2[s] ? sites.end2[s] : 0;
+    return Math.max(e1, e2);
   }
 
   private static final double FACING = 0.99;

@@ -27,6 +27,12 @@ final class SiteBuilder {
   /** Radii below this are no edges any more. */
   private static final double LEAST_RADIUS = 1e-7;
 
+  /**
+   * Square of the curvature, in units of the body's end term, from which a direction counts as
+   * curved: a body as a whole round in that direction has 1.
+   */
+  private static final double CURVED = 0.9;
+
   private final Assembly assembly;
   private final SurfaceMesh mesh;
   private final SurfaceNodes nodes;
@@ -145,24 +151,52 @@ final class SiteBuilder {
     }
   }
 
-  /** Curvature terms of a smooth site from the depth and breadth of the body behind it. */
+  /** Curvature terms of a smooth site from the extent of the body behind it. */
   private void smooth(Sites sites, int s, double[] depth, TriangleCursor cursor) {
     int n = sites.node[s];
+    Part part = assembly.parts().get(sites.part[s]);
+    double[] normal = Arrays.copyOfRange(sites.normal, 3 * s, 3 * s + 3);
+    double[] d1 = Arrays.copyOfRange(nodes.direction1(), 3 * n, 3 * n + 3);
+    double[] d2 = cross(normal, d1);
     double k1 = sites.k1[s];
     double k2 = sites.k2[s];
-    Part part = assembly.parts().get(sites.part[s]);
-    double[] d1 = Arrays.copyOfRange(nodes.direction1(), 3 * n, 3 * n + 3);
-    double[] normal = Arrays.copyOfRange(sites.normal, 3 * s, 3 * s + 3);
-    double[] d2 = cross(normal, d1);
-    double half1 = halfExtent(part, d1);
-    double half2 = halfExtent(part, d2);
+    sites.end1[s] = inverseSquare(halfExtent(part, d1));
+    sites.end2[s] = inverseSquare(halfExtent(part, d2));
+    sites.c1[s] = sites.end1[s];
+    sites.c2[s] = sites.end2[s];
+    boolean curved1 = k1 > 0 && k1 * k1 > CURVED * sites.end1[s];
+    boolean curved2 = k2 > 0 && k2 * k2 > CURVED * sites.end2[s];
+    if (!curved1 && !curved2 && rounded[nodeFace[n]] == null) {
+      return;
+    }
     double size = part.size_m();
     cursor.allowOnly(sites.part[s]);
     double[] p = Arrays.copyOfRange(sites.position, 3 * s, 3 * s + 3);
     depth[s] = chord(cursor, p, normal, -1, 1e-6 * size, size);
-    double a = depth[s] / 2;
-    sites.c1[s] = quadratic(cursor, p, normal, a, d1, k1, half1, size);
-    sites.c2[s] = quadratic(cursor, p, normal, a, d2, k2, half2, size);
+    for (int c = 0; c < 3; c++) {
+      p[c] -= 0.5 * depth[s] * normal[c];
+    }
+    double half = halfExtent(part, normal);
+    if (curved1) {
+      sites.c1[s] = quadratic(k1, half, breadth(cursor, p, d1, size));
+    }
+    if (curved2) {
+      sites.c2[s] = quadratic(k2, half, breadth(cursor, p, d2, size));
+    }
+  }
+
+  /**
+   * Quadratic term of the smooth form. On an ellipsoid's axis it is both k / a, a the semi-axis
+   * along the normal, and 1 / b^2, b the half-breadth; on a sphere k^2. Other bodies get a mean of
+   * the first two, not above the third; the weights are fitted to hemispherically ended rods.
+   */
+  private static double quadratic(double k, double half, double breadth) {
+    return Math.min(k * k, Math.pow(breadth, -1.5) * Math.pow(k / half, 0.25));
+  }
+
+  /** Half the width of the part through an inner point. */
+  private static double breadth(TriangleCursor cursor, double[] p, double[] d, double size) {
+    return 0.5 * (chord(cursor, p, d, 1, 0, size) + chord(cursor, p, d, -1, 0, size));
   }
 
   /** Length of the ray from a point until it leaves the part. */
@@ -180,26 +214,6 @@ final class SiteBuilder {
             2 * size,
             TriangleCursor.Side.LEAVING);
     return hit ? cursor.distance() + start : size;
-  }
-
-  private static double quadratic(
-      TriangleCursor cursor,
-      double[] p,
-      double[] normal,
-      double a,
-      double[] d,
-      double k,
-      double half,
-      double size) {
-    double least = 1 / (half * half);
-    if (k * k <= least) {
-      return least;
-    }
-    double[] middle = {p[0] - a * normal[0], p[1] - a * normal[1], p[2] - a * normal[2]};
-    double breadth =
-        Math.min(chord(cursor, middle, d, 1, 0, size), chord(cursor, middle, d, -1, 0, size));
-    double byBreadth = 1 / (breadth * breadth);
-    return k > 0 ? Math.max(least, Math.min(k * k, Math.max(k / a, byBreadth))) : least;
   }
 
   private static double halfExtent(Part part, double[] d) {
@@ -313,13 +327,14 @@ final class SiteBuilder {
                   + sumNormals[3 * s + 1] * sumNormals[3 * s + 1]
                   + sumNormals[3 * s + 2] * sumNormals[3 * s + 2]);
       double[] d = Arrays.copyOfRange(tangent, 3 * v, 3 * v + 3);
-      double half = halfExtent(part, d);
+      double end = inverseSquare(halfExtent(part, d));
       sites.form[s] = corner ? Sites.CORNER : Sites.EDGE;
       sites.law[s] = corner ? Law.CORNER_AS_MADE : Law.EDGE_AS_MADE;
       sites.wedge[s] = RoundedWedge.ofInteriorAngle(Math.max(0, sharpest[v]));
       sites.k1[s] = 1 / radius;
       sites.k2[s] = corner ? 1 / radius : patches[s] > 1 && sum > 0.1 ? along[s] / sum : 0;
-      sites.c2[s] = Math.max(1 / (half * half), sites.k2[s] > 0 ? sq(sites.k2[s]) : 0);
+      sites.end2[s] = end;
+      sites.c2[s] = Math.max(end, sites.k2[s] > 0 ? sites.k2[s] * sites.k2[s] : 0);
       behind(sites, s, v, radius, part, cursor);
     }
   }
@@ -374,7 +389,7 @@ final class SiteBuilder {
     return nodes.k1()[n] * cos2 + nodes.k2()[n] * (1 - cos2);
   }
 
-  private static double sq(double x) {
-    return x * x;
+  private static double inverseSquare(double x) {
+    return 1 / (x * x);
   }
 }

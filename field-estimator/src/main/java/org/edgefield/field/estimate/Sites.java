@@ -43,6 +43,11 @@ final class Sites {
 
   final double[] c2;
 
+  /** 1 / b^2 of the part's half-extent b in the two directions. */
+  final double[] end1;
+
+  final double[] end2;
+
   /** Wedge of an edge site, else null. */
   final RoundedWedge[] wedge;
 
@@ -63,6 +68,8 @@ final class Sites {
     k2 = new double[count];
     c1 = new double[count];
     c2 = new double[count];
+    end1 = new double[count];
+    end2 = new double[count];
     wedge = new RoundedWedge[count];
     thickness = new double[count];
     width = new double[count];
