@@ -2,8 +2,8 @@ package org.edgefield.cli.colour;
 
 /**
  * Colours of utilisation. Below the amber limit everything is a neutral grey that darkens as the
- * limit nears, so that nothing calm attracts the eye; from the amber limit on it is amber, from 1 on
- * red. The three families are apart in lightness as well as in hue, and each starts with a step.
+ * limit nears, so that nothing calm attracts the eye; from the amber limit on it is amber, from 1
+ * on red. The three families are apart in lightness as well as in hue, and each starts with a step.
  *
  * <p>Colours are packed sRGB, 0xRRGGBB.
  */
@@ -35,7 +35,8 @@ public final class ColourScale {
    */
   public ColourScale(double amberLimit) {
     if (!(amberLimit > 0 && amberLimit <= 1)) {
-      throw new IllegalArgumentException("amber limit must be above 0 and at most 1: " + amberLimit);
+      throw new IllegalArgumentException(
+          "amber limit must be above 0 and at most 1: " + amberLimit);
     }
     this.amberLimit = amberLimit;
   }

@@ -130,7 +130,8 @@ public final class GlbBuilder {
   /**
    * Writes the file.
    *
-   * @throws IOException from the stream, or if the content passes the 4 GiB that the format can hold
+   * @throws IOException from the stream, or if the content passes the 4 GiB that the format can
+   *     hold
    */
   public void write(OutputStream out) throws IOException {
     long length = 0;
@@ -154,7 +155,9 @@ public final class GlbBuilder {
     long total = 12 + 8 + padded(json.length) + 8 + length;
     if (total > 0xffffffffL) {
       throw new IOException(
-          "heatmap of " + total + " bytes passes the 4 GiB limit of binary glTF: use a coarser mesh");
+          "heatmap of "
+              + total
+              + " bytes passes the 4 GiB limit of binary glTF: use a coarser mesh");
     }
     ByteBuffer head = ByteBuffer.allocate(20).order(ByteOrder.LITTLE_ENDIAN);
     head.putInt(MAGIC).putInt(2).putInt((int) total);

@@ -1,7 +1,8 @@
 package org.edgefield.cli.gltf.scene;
 
+import java.util.List;
 import org.edgefield.field.result.DutyField;
-import org.edgefield.field.result.FieldResult;
+import org.edgefield.field.result.DutyResult;
 import org.edgefield.field.result.Law;
 
 /**
@@ -14,30 +15,38 @@ final class Utilisation {
   /** Utilisation beyond which nothing is told apart; keeps values finite. */
   private static final double MOST = 1e4;
 
+  private static final Law[] LAWS = Law.values();
+
   private final double[][] onNode;
   private final double[][] onFace;
   private final boolean[] edgeNode;
 
-  Utilisation(FieldResult result) {
-    int duties = result.duties().size();
-    int nodes = result.nodes().count();
+  /**
+   * Prepares the values.
+   *
+   * @param results the duties to show
+   * @param cornerNode node per triangle corner
+   */
+  Utilisation(List<DutyResult> results, int[] cornerNode) {
+    int duties = results.size();
+    int nodes = results.get(0).field().field_V_per_m().length;
     onNode = new double[duties][nodes];
     onFace = new double[duties][];
     edgeNode = new boolean[nodes];
     for (int d = 0; d < duties; d++) {
-      DutyField field = result.duties().get(d).field();
+      DutyField field = results.get(d).field();
       for (int n = 0; n < nodes; n++) {
         onNode[d][n] = ratio(field.field_V_per_m()[n], field.permitted_V_per_m()[n]);
         edgeNode[n] |= isEdgeLaw(field.law()[n]);
       }
     }
     for (int d = 0; d < duties; d++) {
-      onFace[d] = withoutEdges(onNode[d], result.nodes().cornerNode());
+      onFace[d] = withoutEdges(onNode[d], cornerNode);
     }
   }
 
   private static boolean isEdgeLaw(byte law) {
-    return law == Law.EDGE_AS_MADE.ordinal() || law == Law.CORNER_AS_MADE.ordinal();
+return LAWS[law] == Law.EDGE_AS_MADE || LAWS[law] == Law.CORNER_AS_MADE;
   }
 
   static double ratio(double field, double permitted) {
@@ -75,26 +84,34 @@ final class Utilisation {
     return most;
   }
 
-  /** Edge nodes take the mean of face neighbours; strips too slim to have any keep their value. */
+  /**
+   * Edge nodes take the mean of their face neighbours, row by row inwards from the first; strips
+   * too slim to hold a face node keep their value.
+   */
   private double[] withoutEdges(double[] value, int[] cornerNode) {
-    double[] sum = new double[value.length];
-    int[] count = new int[value.length];
-    for (int t = 0; t < cornerNode.length; t += 3) {
-      for (int c = 0; c < 3; c++) {
-        int node = cornerNode[t + c];
-        for (int o = 1; o < 3 && edgeNode[node]; o++) {
-          int other = cornerNode[t + (c + o) % 3];
-          if (!edgeNode[other]) {
-            sum[node] += value[other];
+    double[] shown = value.clone();
+    boolean[] open = edgeNode.clone();
+    boolean again = true;
+    while (again) {
+      again = false;
+      double[] sum = new double[value.length];
+      int[] count = new int[value.length];
+      for (int t = 0; t < cornerNode.length; t++) {
+        int node = cornerNode[t];
+        for (int o = 1; o < 3 && open[node]; o++) {
+          int other = cornerNode[t - t % 3 + (t + o) % 3];
+          if (!open[other]) {
+            sum[node] += shown[other];
             count[node]++;
           }
         }
       }
-    }
-    double[] shown = value.clone();
-    for (int n = 0; n < value.length; n++) {
-      if (count[n] > 0) {
-        shown[n] = sum[n] / count[n];
+      for (int n = 0; n < value.length; n++) {
+        if (count[n] > 0) {
+          shown[n] = sum[n] / count[n];
+          open[n] = false;
+          again = true;
+        }
       }
     }
     return shown;

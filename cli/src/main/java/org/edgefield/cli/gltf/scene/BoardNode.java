@@ -1,0 +1,51 @@
+package org.edgefield.cli.gltf.scene;
+
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import org.edgefield.cli.gltf.file.GlbBuilder;
+
+/**
+ * Stands the board to the right of the model as seen from the front, upright, readable from both
+ * sides.
+ */
+final class BoardNode {
+  private static final double GAP = 0.06;
+
+  /** Height as a share of the scene's diagonal. */
+  private static final double HEIGHT = 0.62;
+
+  private BoardNode() {}
+
+  /**
+   * Adds the board.
+   *
+   * @param model bounds of the model in glTF axes
+   * @param image picture per duty, all of the same shape
+   * @param aspect width / height of the pictures
+   */
+  static void add(SceneTree tree, Materials materials, Box model, int[] image, double aspect) {
+    double diagonal = model.diagonal();
+    double high = HEIGHT * diagonal;
+    double wide = high * aspect;
+    double left = model.high[0] + GAP * diagonal;
+    double bottom = model.centre(1) - high / 2;
+    double z = model.centre(2);
+    float x0 = (float) left;
+    float x1 = (float) (left + wide);
+    float y0 = (float) bottom;
+    float y1 = (float) (bottom + high);
+    // Front and back lie apart by a hair, each drawn from its own side only.
+    float front = (float) (z + 0.001 * diagonal);
+    float back = (float) (z - 0.001 * diagonal);
+    float[] xyz = {
+      x0, y0, front, x1, y0, front, x1, y1, front, x0, y1, front,
+      x1, y0, back, x0, y0, back, x0, y1, back, x1, y1, back
+    };
+    float[] uv = {0, 1, 1, 1, 1, 0, 0, 0, 0, 1, 1, 1, 1, 0, 0, 0};
+    int[] index = {0, 1, 2, 0, 2, 3, 4, 5, 6, 4, 6, 7};
+    GlbBuilder glb = tree.glb();
+    SceneTree.Leaf leaf = tree.leaf("legend", "legend board");
+    ObjectNode primitive = leaf.primitive(glb.positions(xyz), glb.indices(index));
+    primitive.withObject("/attributes").put("TEXCOORD_0", glb.floats(uv, 2));
+    materials.pictured(primitive, "legend board", image);
+  }
+}
