@@ -66,7 +66,10 @@ final class KhronosValidatorTest {
     Path log = Files.createTempFile("edgefield", ".log");
     try {
       Process process =
-          new ProcessBuilder(command).redirectErrorStream(true).redirectOutput(log.toFile()).start();
+          new ProcessBuilder(command)
+              .redirectErrorStream(true)
+              .redirectOutput(log.toFile())
+              .start();
       boolean ended = process.waitFor(120, TimeUnit.SECONDS);
       if (!ended) {
         process.destroyForcibly();

@@ -30,10 +30,7 @@ final class Samples {
   }
 
   static SampleScene lone() {
-    return new SampleScene()
-        .lone("only")
-        .electrode("e", Electrode.Kind.LIVE, 0)
-        .duty("d", 0.5);
+    return new SampleScene().lone("only").electrode("e", Electrode.Kind.LIVE, 0).duty("d", 0.5);
   }
 
   static SampleScene oneDuty() {

@@ -6,12 +6,15 @@ import org.edgefield.cli.gltf.text.Canvas;
 
 /** A page of text blocks, drawn from the top down; wraps and shortens to its width. */
 final class Board {
-  static final int WIDTH = 1000;
+  static final int WIDTH = 1024;
   static final int MARGIN = 44;
   static final int PAPER = 0xfbfaf6;
   static final int INK = 0x1e2529;
   static final int FAINT = 0x55636b;
-  private static final int TALLEST = 2400;
+
+  /** Rows of the picture; a power of two, as viewers like it. */
+  static final int TALLEST = 2048;
+
   private static final int FRAME = 6;
   private final Canvas canvas = new Canvas(WIDTH, TALLEST, PAPER);
   private int y = MARGIN;
@@ -72,14 +75,14 @@ final class Board {
     return Math.min(TALLEST, y + MARGIN - 14);
   }
 
-  /** The page as PNG, framed. */
+  /** The page as PNG, framed; rows below {@link #rows} are blank. */
   byte[] png() {
     int rows = rows();
     canvas.fill(0, 0, WIDTH, FRAME, INK);
     canvas.fill(0, rows - FRAME, WIDTH, FRAME, INK);
     canvas.fill(0, 0, FRAME, rows, INK);
     canvas.fill(WIDTH - FRAME, 0, FRAME, rows, INK);
-    return canvas.png(rows);
+    return canvas.png();
   }
 
   private static String fitted(String text, double capital, double width) {

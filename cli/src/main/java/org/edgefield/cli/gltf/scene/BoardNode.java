@@ -20,12 +20,12 @@ final class BoardNode {
    *
    * @param model bounds of the model in glTF axes
    * @param image picture per duty, all of the same shape
-   * @param aspect width / height of the pictures
+   * @param rows rows of the pictures in use
    */
-  static void add(SceneTree tree, Materials materials, Box model, int[] image, double aspect) {
+  static void add(SceneTree tree, Materials materials, Box model, int[] image, int rows) {
     double diagonal = model.diagonal();
     double high = HEIGHT * diagonal;
-    double wide = high * aspect;
+    double wide = high * Board.WIDTH / rows;
     double left = model.high[0] + GAP * diagonal;
     double bottom = model.centre(1) - high / 2;
     double z = model.centre(2);
@@ -40,7 +40,8 @@ final class BoardNode {
       x0, y0, front, x1, y0, front, x1, y1, front, x0, y1, front,
       x1, y0, back, x0, y0, back, x0, y1, back, x1, y1, back
     };
-    float[] uv = {0, 1, 1, 1, 1, 0, 0, 0, 0, 1, 1, 1, 1, 0, 0, 0};
+    float v = (float) rows / Board.TALLEST;
+    float[] uv = {0, v, 1, v, 1, 0, 0, 0, 0, v, 1, v, 1, 0, 0, 0};
     int[] index = {0, 1, 2, 0, 2, 3, 4, 5, 6, 4, 6, 7};
     GlbBuilder glb = tree.glb();
     SceneTree.Leaf leaf = tree.leaf("legend", "legend board");

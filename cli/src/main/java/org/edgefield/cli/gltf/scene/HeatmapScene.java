@@ -167,7 +167,7 @@ public final class HeatmapScene {
       board.skip(rows - board.rows());
       image[d] = tree.glb().png(board.png(), "legend board " + (d + 1));
     }
-    BoardNode.add(tree, materials, box, image, (double) Board.WIDTH / rows);
+    BoardNode.add(tree, materials, box, image, rows);
   }
 
   private static void account(

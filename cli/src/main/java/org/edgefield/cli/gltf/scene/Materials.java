@@ -6,6 +6,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.function.IntSupplier;
 import org.edgefield.cli.colour.ColourScale;
 import org.edgefield.cli.colour.Srgb;
 import org.edgefield.cli.gltf.file.GlbBuilder;
@@ -90,9 +91,9 @@ final class Materials {
   void plain(ObjectNode primitive, String name, int rgb) {
     primitive.put(
         "material",
-        made.computeIfAbsent(
+        once(
             name,
-            k -> {
+            () -> {
               ArrayNode factor = unlit(name).putArray("baseColorFactor");
               for (int shift = 16; shift >= 0; shift -= 8) {
                 factor.add(Srgb.linear(Srgb.channel(rgb, shift)));
@@ -126,9 +127,9 @@ final class Materials {
 
   private int scale(int duty, boolean bothSides) {
     String name = "utilisation, " + duties.get(duty) + (bothSides ? ", slice" : "");
-    return made.computeIfAbsent(
+    return once(
         "scale " + duty + bothSides,
-        k -> {
+        () -> {
           ObjectNode pbr = unlit(name);
           pbr.putObject("baseColorTexture")
               .put("index", scaleTexture(duty % 2 == 1))
@@ -141,27 +142,25 @@ final class Materials {
   }
 
   private int scaleTexture(boolean alongV) {
-    Integer known = made.get("texture" + alongV);
-    if (known != null) {
-      return known;
-    }
-    int[] steps = scale.steps(STEPS);
-    int[] rgb = new int[STEPS * STRIP];
-    for (int i = 0; i < rgb.length; i++) {
-      rgb[i] = steps[alongV ? i / STRIP : i % STEPS];
-    }
-    byte[] png =
-        alongV ? PngEncoder.encode(STRIP, STEPS, rgb) : PngEncoder.encode(STEPS, STRIP, rgb);
-    int image = glb.png(png, "utilisation scale 0 to " + (int) ColourScale.END);
-    int texture = texture(image, NEAREST, NEAREST);
-    made.put("texture" + alongV, texture);
-    return texture;
+    return once(
+        "texture" + alongV,
+        () -> {
+          int[] steps = scale.steps(STEPS);
+          int[] rgb = new int[STEPS * STRIP];
+          for (int i = 0; i < rgb.length; i++) {
+            rgb[i] = steps[alongV ? i / STRIP : i % STEPS];
+          }
+          byte[] png =
+              alongV ? PngEncoder.encode(STRIP, STEPS, rgb) : PngEncoder.encode(STEPS, STRIP, rgb);
+          int image = glb.png(png, "utilisation scale 0 to " + (int) ColourScale.END);
+          return texture(image, NEAREST, NEAREST);
+        });
   }
 
   private int picture(String name, int image) {
-    return made.computeIfAbsent(
+    return once(
         "picture" + image,
-        k -> {
+        () -> {
           unlit(name)
               .putObject("baseColorTexture")
               .put("index", texture(image, LINEAR, LINEAR_MIPMAP_LINEAR));
@@ -170,9 +169,9 @@ final class Materials {
   }
 
   private int unseen() {
-    return made.computeIfAbsent(
+    return once(
         "unseen",
-        k -> {
+        () -> {
           unlit("not shown").putArray("baseColorFactor").add(1.0).add(1.0).add(1.0).add(0.0);
           ((ObjectNode) glb.root().withArray("materials").get(last()))
               .put("alphaMode", "MASK")
@@ -183,9 +182,9 @@ final class Materials {
 
   private int texture(int image, int magFilter, int minFilter) {
     int sampler =
-        made.computeIfAbsent(
+        once(
             "sampler" + minFilter,
-            k -> {
+            () -> {
               ArrayNode samplers = glb.root().withArray("samplers");
               samplers
                   .addObject()
@@ -208,6 +207,16 @@ final class Materials {
     ObjectNode pbr = material.putObject("pbrMetallicRoughness");
     // What viewers without the unlit extension fall back to: dull, not metal.
     return pbr.put("metallicFactor", 0.0).put("roughnessFactor", 0.9);
+  }
+
+  /** Index remembered under a key, made on first use. */
+  private int once(String key, IntSupplier make) {
+    Integer known = made.get(key);
+    if (known == null) {
+      known = make.getAsInt();
+      made.put(key, known);
+    }
+    return known;
   }
 
   private int last() {

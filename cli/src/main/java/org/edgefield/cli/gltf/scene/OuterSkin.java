@@ -30,14 +30,15 @@ final class OuterSkin {
       PartLayout layout,
       boolean[] calm) {
     leftOut = new boolean[mesh.triangleCount()];
-    for (Electrode electrode : electrodes) {
+    for (int e = 0; e < electrodes.size(); e++) {
+      Electrode electrode = electrodes.get(e);
       double[] own = emptyBox();
       for (int p : electrode.parts()) {
         grow(own, parts.get(p).bounds_m());
       }
       double[] others = emptyBox();
-      for (Electrode other : electrodes) {
-        for (int p : other == electrode ? new int[0] : other.parts()) {
+      for (int o = 0; o < electrodes.size(); o++) {
+        for (int p : o == e ? new int[0] : electrodes.get(o).parts()) {
           grow(others, parts.get(p).bounds_m());
         }
       }

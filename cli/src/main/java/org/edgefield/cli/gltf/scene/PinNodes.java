@@ -27,9 +27,9 @@ final class PinNodes {
   static final double REACH = 0.065;
 
   private static final double SPIKE_OF_HEAD = 0.13;
-  private static final int CELL = 96;
+  private static final int CELL = 128;
   private static final int COLUMNS = 8;
-  private static final int RIM = 7;
+  private static final int RIM = 9;
   private static final int DARK = 0x1e2529;
   private static final int WHITE = 0xffffff;
 
@@ -64,9 +64,18 @@ final class PinNodes {
     this.dutyCount = dutyCount;
   }
 
+  /** Rows of the texture for so many pins: a power of two, as viewers like it. */
+  private static int rows(int pins) {
+    int rows = 1;
+    while (rows * COLUMNS < pins) {
+      rows *= 2;
+    }
+    return rows;
+  }
+
   /** One texture with a cell per pin of a duty. */
   private int labels(List<HotSpot> spots) {
-    int rows = (spots.size() + COLUMNS - 1) / COLUMNS;
+    int rows = rows(spots.size());
     Canvas canvas = new Canvas(COLUMNS * CELL, rows * CELL, DARK);
     for (int i = 0; i < spots.size(); i++) {
       int left = i % COLUMNS * CELL;
@@ -75,7 +84,7 @@ final class PinNodes {
       int ground = scale.rgb(red ? 1 : scale.amberLimit());
       canvas.fill(left + RIM, top + RIM, CELL - 2 * RIM, CELL - 2 * RIM, ground);
       String text = Integer.toString(spots.get(i).id());
-      double capital = text.length() == 1 ? 54 : text.length() == 2 ? 46 : 30;
+      double capital = text.length() == 1 ? 74 : text.length() == 2 ? 60 : 40;
       double x = left + (CELL - Canvas.textWidth(text, capital)) / 2;
       canvas.text(text, x, top + (CELL + capital) / 2, capital, red ? WHITE : DARK);
     }
@@ -96,7 +105,7 @@ final class PinNodes {
     int[] image = new int[dutyCount];
     Arrays.fill(image, -1);
     image[duty] = labels(spots);
-    int rows = (spots.size() + COLUMNS - 1) / COLUMNS;
+    int rows = rows(spots.size());
     for (int i = 0; i < spots.size(); i++) {
       HotSpot spot = spots.get(i);
       String name =

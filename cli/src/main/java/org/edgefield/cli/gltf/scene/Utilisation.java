@@ -46,7 +46,7 @@ final class Utilisation {
   }
 
   private static boolean isEdgeLaw(byte law) {
-return LAWS[law] == Law.EDGE_AS_MADE || LAWS[law] == Law.CORNER_AS_MADE;
+    return LAWS[law] == Law.EDGE_AS_MADE || LAWS[law] == Law.CORNER_AS_MADE;
   }
 
   static double ratio(double field, double permitted) {

@@ -102,13 +102,8 @@ public final class Canvas {
     return Math.sqrt(least);
   }
 
-  /** The image as PNG, cut off below row {@code rows}. */
-  public byte[] png(int rows) {
-    return PngEncoder.encode(width, rows, rgb);
-  }
-
   /** The image as PNG. */
   public byte[] png() {
-    return png(height);
+    return PngEncoder.encode(width, height, rgb);
   }
 }
