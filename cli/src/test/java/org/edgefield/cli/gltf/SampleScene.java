@@ -325,11 +325,11 @@ final class SampleScene {
       high = Math.max(high, p[0]);
     }
     boolean[] dead = new boolean[nodes];
-    for (int p : ignored) {
-      Part part = parts.get(p);
-      for (int n = 0; n < nodes; n++) {
-        int face = nodePatch.get(n);
-        dead[n] |= face >= part.firstFace() && face < part.firstFace() + part.faceCount();
+    ignored.forEach(p -> mark(p, dead));
+    boolean[] earthed = new boolean[nodes];
+    for (Electrode e : electrodes) {
+      if (e.kind() == Electrode.Kind.EARTH) {
+        Arrays.stream(e.parts()).forEach(p -> mark(p, earthed));
       }
     }
     List<DutyResult> results = new ArrayList<>();
@@ -341,9 +341,11 @@ final class SampleScene {
         double[] p = xyz.get(nodeVertex.get(n));
         double along = (p[0] - low) / (high - low);
         double[] m = normal.get(n);
-        double u = 0.45 * along * (1.2 + m[2] - 0.6 * m[1] + (d % 2 == 0 ? 0.5 : -0.5) * m[0]);
+        double part = earthed[n] ? 0.3 : 1;
+        double u =
+            part * 0.45 * along * (1.2 + m[2] - 0.6 * m[1] + (d % 2 == 0 ? 0.5 : -0.5) * m[0]);
         if (nodeOnEdge.get(n)) {
-          u = 0.2 + 0.8 * along;
+          u = part * (0.2 + 0.8 * along);
           law[n] = 2;
         }
         field[n] = dead[n] ? 0 : Math.max(0, u) * levels.get(d) * PERMITTED;
@@ -373,6 +375,14 @@ final class SampleScene {
         Double.NaN,
         true,
         List.of());
+  }
+
+  private void mark(int part, boolean[] node) {
+    Part p = parts.get(part);
+    for (int n = 0; n < node.length; n++) {
+      int face = nodePatch.get(n);
+      node[n] |= face >= p.firstFace() && face < p.firstFace() + p.faceCount();
+    }
   }
 
   private HotSpot spot(int id, int node, double[] field) {

@@ -27,7 +27,7 @@ final class PinPlacement {
   /**
    * Prepares the search.
    *
-   * @param drawn whether a triangle is drawn; others do not hide anything
+   * @param skin what is not drawn and so hides nothing
    * @param head edge length of a pin's head
    * @param reach usual length of a pin
    */
