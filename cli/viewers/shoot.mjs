@@ -36,7 +36,7 @@ camera.lookAt(sphere.center);
 renderer.render(scene, camera);
 document.title = 'done';
 </script>`;
-const modelViewerPage = `<!doctype html>${style}<style>model-viewer{width:100%;height:100%}</style>
+const modelViewerPage = `<!doctype html>${style}<style>model-viewer{width:100%;height:100%;--progress-bar-color:transparent}</style>
 <script type="module" src="/modules/@google/model-viewer/dist/model-viewer.min.js"></script>
 <model-viewer src="/model.glb" camera-orbit="${orbit}" interaction-prompt="none"></model-viewer>
 <script>document.querySelector('model-viewer').addEventListener('load', () => { document.title = 'done'; });</script>`;
@@ -45,6 +45,10 @@ const types = { js: 'text/javascript', glb: 'model/gltf-binary' };
 const server = createServer((request, response) => {
   const path = decodeURIComponent(new URL(request.url, 'http://localhost').pathname);
   const page = { '/three': threePage, '/model-viewer': modelViewerPage }[path];
+  if (path === '/favicon.ico') {
+    response.writeHead(204).end();
+    return;
+  }
   if (page) {
     response.writeHead(200, { 'Content-Type': 'text/html' }).end(page);
     return;

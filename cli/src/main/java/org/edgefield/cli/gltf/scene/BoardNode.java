@@ -8,10 +8,16 @@ import org.edgefield.cli.gltf.file.GlbBuilder;
  * sides.
  */
 final class BoardNode {
+  /** Distance from the model as a share of its diagonal. */
   private static final double GAP = 0.06;
 
-  /** Height as a share of the scene's diagonal. */
-  private static final double HEIGHT = 0.62;
+  /** Distance as a share of the model's depth: free of it in views up to 30 degrees aside. */
+  private static final double GAP_OF_DEPTH = 0.5 * Math.tan(Math.toRadians(30));
+
+  /** Smallest and largest height as a share of the model's diagonal. */
+  private static final double LOWEST = 0.45;
+
+  private static final double HIGHEST = 0.62;
 
   private BoardNode() {}
 
@@ -24,9 +30,9 @@ final class BoardNode {
    */
   static void add(SceneTree tree, Materials materials, Box model, int[] image, int rows) {
     double diagonal = model.diagonal();
-    double high = HEIGHT * diagonal;
+    double high = Math.max(LOWEST * diagonal, Math.min(HIGHEST * diagonal, 1.1 * model.size(1)));
     double wide = high * Board.WIDTH / rows;
-    double left = model.high[0] + GAP * diagonal;
+    double left = model.high[0] + Math.max(GAP * diagonal, GAP_OF_DEPTH * model.size(2));
     double bottom = model.centre(1) - high / 2;
     double z = model.centre(2);
     float x0 = (float) left;
