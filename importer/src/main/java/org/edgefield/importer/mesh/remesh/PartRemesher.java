@@ -1,0 +1,142 @@
+package org.edgefield.importer.mesh.remesh;
+
+import org.edgefield.importer.brep.ExactGeometry;
+import org.edgefield.importer.mesh.halfedge.HalfEdgeMesh;
+import org.edgefield.importer.mesh.size.SizeSource;
+import org.edgefield.importer.mesh.size.VertexField;
+
+/**
+ * Remeshes one part on its exact surface in a field of size tensors: splits long edges, collapses
+ * short ones, flips and relaxes, until little changes. Deterministic.
+ *
+ * <p>CAD vertices and CAD edges are kept, seams included. Where the CAD model itself has slivers
+ * thinner than 1/64 of the size around, elements there stay slivers.
+ */
+public final class PartRemesher {
+  private static final int PASSES = 5;
+  private static final int SPLIT_ROUNDS = 80;
+  private static final int COLLAPSE_ROUNDS = 3;
+
+  /** From this pass on, narrow places between CAD edges lower the sizes. */
+  private static final int LIMITS_FROM = 1;
+
+  /** Share of triangles that may still change when the work counts as done. */
+  private static final double SETTLED = 0.01;
+
+  private final Workspace w;
+  private final Splitter splitter;
+  private final Collapser collapser;
+  private final Relaxer relaxer;
+
+  private PartRemesher(Workspace w) {
+    this.w = w;
+    splitter = new Splitter(w);
+    collapser = new Collapser(w);
+    relaxer = new Relaxer(w);
+  }
+
+  /**
+   * Remeshes in place.
+   *
+   * @param geometry exact geometry
+   * @param mesh the part's mesh
+   * @param field holds the wanted sizes per vertex in {@code target}; receives the tensors
+   * @param sizes the size field
+   */
+  public static void run(
+      ExactGeometry geometry, HalfEdgeMesh mesh, VertexField field, SizeSource sizes) {
+    sizes.findApexes(mesh);
+    new PartRemesher(new Workspace(geometry, mesh, field, sizes)).run();
+  }
+
+  /**
+   * Evaluates the size field on a mesh as it is.
+   *
+   * @param geometry exact geometry
+   * @param mesh the part's mesh; receives its normals
+   * @param field holds the wanted sizes per vertex in {@code target}; receives the tensors
+   * @param sizes the size field
+   */
+  public static void measure(
+      ExactGeometry geometry, HalfEdgeMesh mesh, VertexField field, SizeSource sizes) {
+    sizes.findApexes(mesh);
+    new Workspace(geometry, mesh, field, sizes).refreshAll(true);
+  }
+
+  private void run() {
+    w.refreshAll(false);
+    Flipper.run(w);
+    for (int pass = 0; pass < PASSES; pass++) {
+      int changes = splitAll() + collapseAll();
+      relax(2, 0.95);
+      w.refreshAll(pass >= LIMITS_FROM);
+      Flipper.run(w);
+      if (pass > LIMITS_FROM && changes < SETTLED * w.mesh.living) {
+        break;
+      }
+    }
+    relax(3, 0.8);
+    mend();
+    w.refreshAll(true);
+  }
+
+  private int splitAll() {
+    int total = 0;
+    for (int round = 0; round < SPLIT_ROUNDS; round++) {
+      int n = splitter.round(false);
+      if (n == 0) {
+        n = splitter.round(true);
+      }
+      if (n == 0) {
+        break;
+      }
+      total += n;
+      Flipper.run(w);
+    }
+    return total;
+  }
+
+  private int collapseAll() {
+    int total = 0;
+    for (int round = 0; round < COLLAPSE_ROUNDS; round++) {
+      int n = collapser.round();
+      total += n;
+      Flipper.run(w);
+      if (n == 0) {
+        break;
+      }
+    }
+    return total;
+  }
+
+  private void relax(int rounds, double below) {
+    for (int i = 0; i < rounds; i++) {
+      relaxer.round(below);
+      Flipper.run(w);
+    }
+  }
+
+  /** Works on the worst triangles alone: collapses whatever makes them better. */
+  private void mend() {
+    for (int round = 0; round < 3; round++) {
+      int n = 0;
+      for (int t = 0; t < w.mesh.triangles; t++) {
+        if (w.mesh.face[t] < 0 || w.shape(t) > 0.6) {
+          continue;
+        }
+        for (int h = 3 * t; h < 3 * t + 3; h++) {
+          if (collapser.tryCollapse(h, 1.7, 0.6)
+              || collapser.tryCollapse(w.mesh.opp[h], 1.7, 0.6)) {
+            n++;
+            break;
+          }
+        }
+      }
+      Flipper.run(w);
+      relax(2, 0.7);
+      if (n == 0) {
+        break;
+      }
+    }
+  }
+}
