@@ -26,16 +26,22 @@ final class Collapser {
     this.w = w;
   }
 
-  /** Tries every vertex once; returns the number of vertices removed. */
-  int round() {
+  /**
+   * Tries every vertex once.
+   *
+   * @param stretch factor on the lengths that decide, 1 as a rule
+   * @param most number of vertices after which to stop
+   * @return the number of vertices removed
+   */
+  int round(double stretch, int most) {
     HalfEdgeMesh mesh = w.mesh;
     int removed = 0;
-    for (int v = 0; v < mesh.vertices; v++) {
+    for (int v = 0; v < mesh.vertices && removed < most; v++) {
       if (mesh.out[v] < 0 || mesh.kind[v] == SurfaceMesh.ON_VERTEX) {
         continue;
       }
       int best = -1;
-      double shortest = SHORT;
+      double shortest = SHORT * stretch;
       int h = mesh.out[v];
       do {
         if (mesh.kind[v] == SurfaceMesh.ON_FACE || mesh.cad[h] >= 0) {
@@ -47,7 +53,7 @@ final class Collapser {
         }
         h = mesh.turn(h);
       } while (h != mesh.out[v]);
-      if (best >= 0 && tryCollapse(best, LONGEST, FAIR)) {
+      if (best >= 0 && tryCollapse(best, LONGEST * stretch, FAIR)) {
         removed++;
       }
     }

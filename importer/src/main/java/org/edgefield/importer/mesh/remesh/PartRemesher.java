@@ -23,6 +23,9 @@ public final class PartRemesher {
   /** Share of triangles that may still change when the work counts as done. */
   private static final double SETTLED = 0.01;
 
+  /** Triangles over the number wanted from which on they are thinned out. */
+  private static final double CROWDED = 1.15;
+
   private final Workspace w;
   private final Splitter splitter;
   private final Collapser collapser;
@@ -64,6 +67,7 @@ public final class PartRemesher {
   }
 
   private void run() {
+    new EdgeCorners(w).settle();
     w.refreshAll(false);
     Flipper.run(w);
     for (int pass = 0; pass < PASSES; pass++) {
@@ -75,6 +79,7 @@ public final class PartRemesher {
         break;
       }
     }
+    thin();
     relax(3, 0.8);
     mend();
     w.refreshAll(true);
@@ -99,7 +104,7 @@ public final class PartRemesher {
   private int collapseAll() {
     int total = 0;
     for (int round = 0; round < COLLAPSE_ROUNDS; round++) {
-      int n = collapser.round();
+      int n = collapser.round(1, Integer.MAX_VALUE);
       total += n;
       Flipper.run(w);
       if (n == 0) {
@@ -107,6 +112,20 @@ public final class PartRemesher {
       }
     }
     return total;
+  }
+
+  /** Collapses more where regular patterns hold many more triangles than the field asks for. */
+  private void thin() {
+    double wanted = 0;
+    for (int t = 0; t < w.mesh.triangles; t++) {
+      wanted += w.mesh.face[t] < 0 ? 0 : Shape.elements(w.mesh, w.field, t);
+    }
+    double excess = w.mesh.living / wanted;
+    if (excess > CROWDED) {
+      // A vertex takes two triangles with it.
+      collapser.round(Math.sqrt(excess), (int) (0.5 * (w.mesh.living - wanted)));
+      Flipper.run(w);
+    }
   }
 
   private void relax(int rounds, double below) {

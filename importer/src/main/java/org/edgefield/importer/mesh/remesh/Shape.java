@@ -16,6 +16,8 @@ final class Shape {
 
   private static final double FOUR_ROOT_THREE = 4 * Math.sqrt(3);
 
+  private static final double UNIT_AREA = Math.sqrt(3) / 4;
+
   private Shape() {}
 
   /**
@@ -61,6 +63,31 @@ final class Shape {
     }
     double[] n = mesh.normal;
     return n[3 * h] * nx + n[3 * h + 1] * ny + n[3 * h + 2] * nz;
+  }
+
+  /** Area of a triangle in the mean tensor of its corners, in units of an equilateral element. */
+  static double elements(HalfEdgeMesh mesh, VertexField field, int t) {
+    double[] x = mesh.xyz;
+    int a = mesh.org[3 * t];
+    int b = mesh.org[3 * t + 1];
+    int c = mesh.org[3 * t + 2];
+    double[] m = new double[Metric.STRIDE];
+    for (int i = 0; i < Metric.STRIDE; i++) {
+      m[i] =
+          (field.metric[Metric.STRIDE * a + i]
+                  + field.metric[Metric.STRIDE * b + i]
+                  + field.metric[Metric.STRIDE * c + i])
+              / 3;
+    }
+    double uu = square(m, x, a, b);
+    double vv = square(m, x, a, c);
+    double uv = 0.5 * (uu + vv - square(m, x, b, c));
+    return 0.5 * Math.sqrt(Math.max(0, uu * vv - uv * uv)) / UNIT_AREA;
+  }
+
+  private static double square(double[] m, double[] x, int a, int b) {
+    return Metric.square(
+        m, 0, x[3 * b] - x[3 * a], x[3 * b + 1] - x[3 * a + 1], x[3 * b + 2] - x[3 * a + 2]);
   }
 
   private static double inMetric(HalfEdgeMesh mesh, VertexField field, int a, int b, int c) {
