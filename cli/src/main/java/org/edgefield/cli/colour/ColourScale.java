@@ -19,10 +19,10 @@ public final class ColourScale {
 
   private static final int IDLE = 0xd3d9db;
   private static final int HALF = 0x9fafb7;
-  private static final int NEARLY = 0x6d848f;
-  private static final int AMBER_FIRST = 0xffb70f;
-  private static final int AMBER_LAST = 0xf59200;
-  private static final int RED_FIRST = 0xcc1226;
+  private static final int NEARLY = 0x637985;
+  private static final int AMBER_FIRST = 0xffbb1a;
+  private static final int AMBER_LAST = 0xf79a00;
+  private static final int RED_FIRST = 0xca1024;
   private static final int RED_LAST = 0x63001c;
 
   private final double amberLimit;

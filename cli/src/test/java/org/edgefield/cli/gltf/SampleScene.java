@@ -452,13 +452,18 @@ final class SampleScene {
 
   /** The heatmap file. */
   byte[] glb(SliceLayer... slices) {
+    return glb(result(), slices);
+  }
+
+  /** The heatmap file of a doctored outcome. */
+  byte[] glb(FieldResult result, SliceLayer... slices) {
     ByteArrayOutputStream out = new ByteArrayOutputStream();
     try {
       HeatmapWriter.write(
           out,
           assembly(),
           job(),
-          result(),
+          result,
           new HeatmapStamp("0.0-test", LocalDate.of(2026, 1, 2)),
           List.of(slices));
     } catch (IOException e) {

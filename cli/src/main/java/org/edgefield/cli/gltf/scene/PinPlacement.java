@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.List;
 import org.edgefield.importer.mesh.SurfaceMesh;
 import org.edgefield.importer.mesh.spatial.TriangleCursor;
-import org.edgefield.importer.mesh.spatial.TriangleTree;
 
 /**
  * Finds room for the heads of the pins: clear of metal and of each other, and in sight from where
@@ -19,6 +18,9 @@ final class PinPlacement {
   private static final double[] REACHES = {1, 1.7, 2.6, 4, 6};
   private static final double SLOPE = Math.sqrt(0.5);
 
+  /** Cell of the coarse mesh that is searched, as a share of a head. */
+  private static final double CELL_OF_HEAD = 0.25;
+
   private final TriangleCursor cursor;
   private final double head;
   private final double reach;
@@ -32,11 +34,7 @@ final class PinPlacement {
    * @param reach usual length of a pin
    */
   PinPlacement(SurfaceMesh mesh, OuterSkin skin, double head, double reach) {
-    int[] group = new int[mesh.triangleCount()];
-    for (int t = 0; t < group.length; t++) {
-      group[t] = skin.leftOut(t) ? -1 : 0;
-    }
-    cursor = TriangleTree.build(mesh.xyz(), mesh.triangles(), group).cursor();
+    cursor = CoarseMesh.tree(mesh, skin, CELL_OF_HEAD * head).cursor();
     this.head = head;
     this.reach = reach;
   }
@@ -104,7 +102,7 @@ final class PinPlacement {
     if (!hit(c, 0, CAMERA, Double.POSITIVE_INFINITY, TriangleCursor.Side.LEAVING)) {
       score += 2;
     }
-    if (!hit(at, 0.02 * length, d, length, TriangleCursor.Side.ANY)) {
+    if (!hit(at, CELL_OF_HEAD * head, d, length, TriangleCursor.Side.ANY)) {
       score += 1;
     }
     return score;
