@@ -1,0 +1,230 @@
+package org.edgefield.field.bem.solve;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import org.edgefield.curvature.Features;
+import org.edgefield.field.estimate.EstimateModel;
+import org.edgefield.field.gas.PermittedField;
+import org.edgefield.field.gas.PermittedFields;
+import org.edgefield.field.hotspot.HotSpots;
+import org.edgefield.field.job.FieldCase;
+import org.edgefield.field.parallel.Workers;
+import org.edgefield.field.result.DutyField;
+import org.edgefield.field.result.DutyResult;
+import org.edgefield.field.result.FieldResult;
+import org.edgefield.field.result.Law;
+import org.edgefield.importer.Progress;
+import org.edgefield.importer.brep.Assembly;
+import org.edgefield.importer.mesh.MeshRequest;
+import org.edgefield.importer.mesh.MeshSettings;
+import org.edgefield.importer.mesh.SurfaceMesh;
+import org.edgefield.importer.mesh.SurfaceMesher;
+
+/**
+ * Solves the field of a case by boundary elements, refining until the peak of every electrode and
+ * duty is as accurate as asked, or the budget is spent.
+ *
+ * <p>The claimed uncertainty of a peak is the largest of its change since the level before, the
+ * distance of raw and recovered value, and a floor of 0.1 %. Sharp edges drawn without a radius have
+ * no finite field; there the estimate's value for the edge as made stands.
+ */
+public final class FieldSolver {
+  private static final int LEVELS = 6;
+  private static final double FLOOR = 1e-3;
+
+  /** Bytes per triangle of a level with four right-hand sides, on the safe side. */
+  private static final double BYTES_PER_TRIANGLE = 12_000;
+
+  /** A level takes about this many times the one before. */
+  private static final double GROWTH = 3;
+
+  private FieldSolver() {}
+
+  /**
+   * Runs the solve.
+   *
+   * @param assembly the model
+   * @param start closed mesh of the assembly to begin from, such as the kernel's triangulation
+   * @param features edge classes and rounded edges
+   * @param fieldCase electrodes, duties, surroundings
+   * @param meshSettings sizes of the first mesh
+   * @param settings accuracy and budget
+   * @param progress receives reports
+   * @return result of method SOLVE; not converged where the budget ended the refinement
+   * @throws SolveException where parts of different electrodes touch or nothing carries charge
+   */
+  public static FieldResult solve(
+      Assembly assembly,
+      SurfaceMesh start,
+      Features features,
+      FieldCase fieldCase,
+      MeshSettings meshSettings,
+      SolveSettings settings,
+      Progress progress) {
+    long begin = System.nanoTime();
+    int[] electrodeOfPart = fieldCase.electrodeOfPart(assembly.parts().size());
+    MeshRequest request = MeshRequest.NONE.withPartGroup(electrodeOfPart);
+    SurfaceMesh mesh = SurfaceMesher.refine(assembly, start, meshSettings, request, progress);
+    ContactCheck.refuseShorts(assembly, mesh, fieldCase);
+    double farTolerance = Math.max(1e-7, Math.min(1e-5, 1e-3 * settings.accuracy()));
+    Level level = null;
+    double[][] uncertainty = null;
+    boolean converged = false;
+    try (Workers workers = new Workers(settings.threads())) {
+      for (int number = 1; ; number++) {
+        long levelBegin = System.nanoTime();
+        String label = "level " + number + ", ";
+        Progress labelled = (phase, share, detail) -> progress.report(phase, share, label + detail);
+        Level next =
+            Level.solve(assembly, features, mesh, fieldCase, farTolerance, workers, labelled);
+        uncertainty = uncertainties(level, next, fieldCase);
+        converged = level != null && worst(uncertainty) <= settings.accuracy();
+        level = next;
+        progress.report("solve", Double.NaN, report(number, level, uncertainty));
+        double spent = (System.nanoTime() - begin) * 1e-9;
+        double ahead = GROWTH * (System.nanoTime() - levelBegin) * 1e-9;
+        if (converged || number == LEVELS || (number > 1 && spent + ahead > settings.time_s())) {
+          break;
+        }
+        double[] target = Refinement.targets(level, settings.accuracy());
+        SurfaceMesh finer =
+            SurfaceMesher.refine(
+                assembly, mesh, meshSettings, request.withTargetSize(target), labelled);
+        if (finer.triangleCount() * BYTES_PER_TRIANGLE > settings.memory_bytes()) {
+          break;
+        }
+        mesh = finer;
+      }
+    }
+    List<String> warnings = new ArrayList<>();
+    if (!converged) {
+      warnings.add(
+          String.format(
+              Locale.ROOT,
+              "the budget ended the refinement: peak fields are uncertain by %.1f %%, asked were"
+                  + " %.1f %%; allow more time or memory, or ask for less",
+              100 * worst(uncertainty),
+              100 * settings.accuracy()));
+    }
+    return new FieldResult(
+        FieldResult.Method.SOLVE,
+        level.mesh(),
+        level.nodes(),
+        duties(assembly, features, fieldCase, level, uncertainty, progress),
+        level.units().capacitance_F(),
+        worst(uncertainty),
+        converged,
+        List.copyOf(warnings));
+  }
+
+  private static double worst(double[][] uncertainty) {
+    return Arrays.stream(uncertainty).flatMapToDouble(Arrays::stream).max().orElse(0);
+  }
+
+  private static String report(int number, Level level, double[][] uncertainty) {
+    return String.format(
+        Locale.ROOT,
+        "level %d done: %,d unknowns, %d iterations, uncertainty %.2f %%",
+        number,
+        level.surface().unknowns(),
+        level.units().iterations(),
+        100 * worst(uncertainty));
+  }
+
+  // Per duty and electrode; without a level before, twice the distance of raw and recovered value.
+  private static double[][] uncertainties(Level before, Level now, FieldCase fieldCase) {
+    int electrodes = fieldCase.electrodes().size();
+    double[][] out = new double[fieldCase.duties().size()][electrodes];
+    for (int d = 0; d < out.length; d++) {
+      double highest = 0;
+      for (int e = 0; e < electrodes; e++) {
+        int p = now.peak(d, e);
+        highest = Math.max(highest, p < 0 ? 0 : now.recovered().get(d)[p]);
+      }
+      for (int e = 0; e < electrodes; e++) {
+        int p = now.peak(d, e);
+        out[d][e] = FLOOR;
+        // A thousandth of the highest field is no peak anyone asks for.
+        if (p < 0 || now.recovered().get(d)[p] < 1e-3 * highest) {
+          continue;
+        }
+        double value = now.recovered().get(d)[p];
+        double raw = Math.abs(now.raw().get(d)[p] / value - 1);
+        if (before == null) {
+          out[d][e] = Math.max(FLOOR, 2 * raw);
+        } else {
+          int q = before.peak(d, e);
+          double change = Math.abs(before.recovered().get(d)[q] / value - 1);
+          out[d][e] = Math.max(FLOOR, Math.max(raw, change));
+        }
+      }
+    }
+    return out;
+  }
+
+  private static List<DutyResult> duties(
+      Assembly assembly,
+      Features features,
+      FieldCase fieldCase,
+      Level level,
+      double[][] uncertainty,
+      Progress progress) {
+    PermittedField permitted = PermittedFields.of(fieldCase.permitted(), fieldCase.surroundings());
+    EstimateModel model =
+        EstimateModel.build(assembly, level.mesh(), level.nodes(), features, fieldCase, progress);
+    HotSpots hotSpots =
+        new HotSpots(
+            assembly,
+            level.mesh(),
+            level.nodes(),
+            features,
+            model,
+            permitted,
+            fieldCase.permitted().amber());
+    List<DutyResult> duties = new ArrayList<>();
+    for (int d = 0; d < fieldCase.duties().size(); d++) {
+      duties.add(hotSpots.of(d, onNodes(level, d, uncertainty[d], model.field(d, permitted))));
+    }
+    return List.copyOf(duties);
+  }
+
+  private static DutyField onNodes(
+      Level level, int duty, double[] uncertainty, DutyField estimate) {
+    int n = level.nodes().count();
+    double[] field = new double[n];
+    byte[] law = new byte[n];
+    double[] relative = new double[n];
+    for (int i = 0; i < n; i++) {
+      int u = level.surface().nodeUnknown()[i];
+      law[i] = code(Law.SOLVED);
+      if (u < 0) {
+        continue;
+      }
+      if (estimate.law()[i] == code(Law.EDGE_AS_MADE)
+          || estimate.law()[i] == code(Law.CORNER_AS_MADE)) {
+        field[i] = estimate.field_V_per_m()[i];
+        law[i] = estimate.law()[i];
+        relative[i] = estimate.uncertainty()[i];
+      } else {
+        field[i] = level.recovered().get(duty)[u];
+        relative[i] = uncertainty[level.surface().electrode()[u]];
+      }
+    }
+    return new DutyField(
+        estimate.duty(),
+        field,
+        estimate.permitted_V_per_m(),
+        estimate.gap_m(),
+        estimate.radius_m(),
+        law,
+        relative);
+  }
+
+  /** The form in which {@link DutyField#law} keeps a law. */
+  @SuppressWarnings("EnumOrdinal")
+  private static byte code(Law law) {
+    return (byte) law.ordinal();
+  }
+}

@@ -1,0 +1,94 @@
+package org.edgefield.field.bem.solve;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.edgefield.curvature.Features;
+import org.edgefield.curvature.SurfaceNodes;
+import org.edgefield.curvature.node.NodeBuilder;
+import org.edgefield.field.bem.recovery.FieldRecovery;
+import org.edgefield.field.job.Duty;
+import org.edgefield.field.job.FieldCase;
+import org.edgefield.field.parallel.Workers;
+import org.edgefield.importer.Progress;
+import org.edgefield.importer.brep.Assembly;
+import org.edgefield.importer.mesh.SurfaceMesh;
+
+/**
+ * One solved mesh: raw and recovered field magnitudes of every duty at the unknowns.
+ *
+ * @param mesh the mesh
+ * @param nodes its smooth-patch nodes
+ * @param surface charged part of it
+ * @param units solved densities
+ * @param raw per duty, magnitude over the cycle at every unknown, V/m
+ * @param recovered the same, smoothed
+ */
+record Level(
+    SurfaceMesh mesh,
+    SurfaceNodes nodes,
+    ChargedSurface surface,
+    UnitFields units,
+    List<double[]> raw,
+    List<double[]> recovered) {
+
+  static Level solve(
+      Assembly assembly,
+      Features features,
+      SurfaceMesh mesh,
+      FieldCase fieldCase,
+      double farTolerance,
+      Workers workers,
+      Progress progress) {
+    SurfaceNodes nodes = NodeBuilder.smoothPatches(assembly.geometry(), mesh, features);
+    ChargedSurface surface = ChargedSurface.of(assembly, mesh, nodes, fieldCase);
+    if (surface.unknowns() == 0) {
+      throw new SolveException("no electrode has a surface that can carry charge");
+    }
+    UnitFields units = UnitFields.solve(surface, fieldCase, farTolerance, workers, progress);
+    double[] normal = new double[3 * surface.unknowns()];
+    for (int i = 0; i < surface.unknowns(); i++) {
+      System.arraycopy(nodes.normal(), 3 * surface.unknownNode()[i], normal, 3 * i, 3);
+    }
+    FieldRecovery recovery =
+        new FieldRecovery(surface.cornerUnknown(), surface.position(), normal, surface.seam());
+    double[][] smooth = new double[units.density().length][];
+    for (int k = 0; k < smooth.length; k++) {
+      smooth[k] = recovery.recover(units.density()[k]);
+    }
+    List<double[]> raw = new ArrayList<>();
+    List<double[]> recovered = new ArrayList<>();
+    for (Duty duty : fieldCase.duties()) {
+      Superposition weights = Superposition.of(fieldCase, duty, units.charge_C());
+      raw.add(magnitude(weights, units.density()));
+      recovered.add(magnitude(weights, smooth));
+    }
+    return new Level(mesh, nodes, surface, units, raw, recovered);
+  }
+
+  // Only the normal component exists on a conductor, so the peak over the cycle is the modulus.
+  private static double[] magnitude(Superposition weights, double[][] density) {
+    double[] out = new double[density[0].length];
+    for (int i = 0; i < out.length; i++) {
+      out[i] = 4 * Math.PI * Math.hypot(weights.real(density, i), weights.imaginary(density, i));
+    }
+    return out;
+  }
+
+  /**
+   * Unknown with the highest recovered field of a duty on an electrode, borders left out.
+   *
+   * @return unknown, -1 where the electrode has none off a border
+   */
+  int peak(int duty, int electrode) {
+    int best = -1;
+    double[] value = recovered.get(duty);
+    for (int i = 0; i < value.length; i++) {
+      if (surface.electrode()[i] == electrode
+          && !surface.seam()[i]
+          && (best < 0 || value[i] > value[best])) {
+        best = i;
+      }
+    }
+    return best;
+  }
+}
