@@ -18,6 +18,6 @@ final class ExpansionOrder {
       throw new IllegalArgumentException("accuracy must lie between 1e-12 and 1, got " + tolerance);
     }
     double digits = -Math.log10(tolerance);
-    return (int) Math.max(2, Math.ceil(digits <= 4 ? 2 * digits - 1 : 7 + 4.6 * (digits - 4)));
+    return (int) Math.max(2, Math.ceil(digits <= 4 ? 2 * digits - 1 : 7 + 5 * (digits - 4)));
   }
 }

@@ -13,8 +13,8 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 /** Measured errors against direct sums stay below the requested accuracy. */
 class FastMultipoleTest {
-  private static final int N = 20_000;
-  private static final int CHECKED = 300;
+  private static final int N = 10_000;
+  private static final int CHECKED = 200;
 
   @ParameterizedTest
   @CsvSource({

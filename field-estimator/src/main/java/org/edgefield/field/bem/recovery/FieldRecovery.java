@@ -3,10 +3,10 @@ package org.edgefield.field.bem.recovery;
 import java.util.Arrays;
 
 /**
- * Smoothed nodal values: a quadratic fitted over the two rings of nodes around each, in tangent-plane
- * coordinates scaled to arc length, with weights exp(-0.7 rho^2) in the patch's own anisotropic
- * metric. Removes the wobble of the linear density; near a border, or where a patch is too small for
- * the fit, the raw value stays.
+ * Smoothed nodal values: a quadratic fitted over the two rings of nodes around each, in
+ * tangent-plane coordinates scaled to arc length, with weights exp(-0.7 rho^2) in the patch's own
+ * anisotropic metric. Removes the wobble of the linear density; near a border, or where a patch is
+ * too small for the fit, the raw value stays.
  */
 public final class FieldRecovery {
   private static final int LEAST_POINTS = 9;

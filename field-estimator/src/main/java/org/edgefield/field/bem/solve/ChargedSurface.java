@@ -70,8 +70,7 @@ record ChargedSurface(
     }
     double[] position = new double[3 * unknowns];
     for (int u = 0; u < unknowns; u++) {
-      System.arraycopy(
-          mesh.xyz(), 3 * nodes.nodeVertex()[unknownNode[u]], position, 3 * u, 3);
+      System.arraycopy(mesh.xyz(), 3 * nodes.nodeVertex()[unknownNode[u]], position, 3 * u, 3);
     }
     return new ChargedSurface(
         new CurvedTriangles(SideMidPoints.geometry(assembly.geometry(), mesh, chosen)),

@@ -11,8 +11,8 @@ import org.edgefield.importer.mesh.spatial.TriangleCursor;
 import org.edgefield.importer.mesh.spatial.TriangleTree;
 
 /**
- * Looks at how parts touch: surfaces of one electrode hidden inside or pressed against another of its
- * parts carry no charge; parts of two electrodes must not touch or intersect.
+ * Looks at how parts touch: surfaces of one electrode hidden inside or pressed against another of
+ * its parts carry no charge; parts of two electrodes must not touch or intersect.
  */
 final class ContactCheck {
   /** Closer than this share of the part's size counts as touching. */
@@ -85,7 +85,11 @@ final class ContactCheck {
     double nz = ux * vy - uy * vx;
     double n = Math.sqrt(nx * nx + ny * ny + nz * nz);
     double lift =
-        n > 0 ? LIFT * Math.sqrt(Math.max(ux * ux + uy * uy + uz * uz, vx * vx + vy * vy + vz * vz)) / n : 0;
+        n > 0
+            ? LIFT
+                * Math.sqrt(Math.max(ux * ux + uy * uy + uz * uz, vx * vx + vy * vy + vz * vz))
+                / n
+            : 0;
     out[0] = (x[a] + x[b] + x[c]) / 3 + lift * nx;
     out[1] = (x[a + 1] + x[b + 1] + x[c + 1]) / 3 + lift * ny;
     out[2] = (x[a + 2] + x[b + 2] + x[c + 2]) / 3 + lift * nz;

@@ -26,9 +26,10 @@ import org.edgefield.importer.mesh.SurfaceMesher;
  * Solves the field of a case by boundary elements, refining until the peak of every electrode and
  * duty is as accurate as asked, or the budget is spent.
  *
- * <p>The claimed uncertainty of a peak is the largest of its change since the level before, the
- * distance of raw and recovered value, and a floor of 0.1 %. Sharp edges drawn without a radius have
- * no finite field; there the estimate's value for the edge as made stands.
+ * <p>The claimed uncertainty of a peak is the largest of its change since the level before, a
+ * quarter of the change before that (a change can be small by chance), the distance of raw and
+ * recovered value, and a floor of 0.1 %. Sharp edges drawn without a radius have no finite field;
+ * there the estimate's value for the edge as made stands.
  */
 public final class FieldSolver {
   private static final int LEVELS = 6;
@@ -71,6 +72,7 @@ public final class FieldSolver {
     double farTolerance = Math.max(1e-7, Math.min(1e-5, 1e-3 * settings.accuracy()));
     Level level = null;
     double[][] uncertainty = null;
+    double[][] change = null;
     boolean converged = false;
     try (Workers workers = new Workers(settings.threads())) {
       for (int number = 1; ; number++) {
@@ -79,7 +81,9 @@ public final class FieldSolver {
         Progress labelled = (phase, share, detail) -> progress.report(phase, share, label + detail);
         Level next =
             Level.solve(assembly, features, mesh, fieldCase, farTolerance, workers, labelled);
-        uncertainty = uncertainties(level, next, fieldCase);
+        double[][] earlier = change;
+        change = changes(level, next, fieldCase);
+        uncertainty = uncertainties(next, change, earlier);
         converged = level != null && worst(uncertainty) <= settings.accuracy();
         level = next;
         progress.report("solve", Double.NaN, report(number, level, uncertainty));
@@ -133,31 +137,37 @@ public final class FieldSolver {
         100 * worst(uncertainty));
   }
 
-  // Per duty and electrode; without a level before, twice the distance of raw and recovered value.
-  private static double[][] uncertainties(Level before, Level now, FieldCase fieldCase) {
-    int electrodes = fieldCase.electrodes().size();
-    double[][] out = new double[fieldCase.duties().size()][electrodes];
-    for (int d = 0; d < out.length; d++) {
-      double highest = 0;
-      for (int e = 0; e < electrodes; e++) {
+  // Relative change of the peaks per duty and electrode; 0 where there is nothing to compare.
+  private static double[][] changes(Level before, Level now, FieldCase fieldCase) {
+    double[][] out = new double[fieldCase.duties().size()][fieldCase.electrodes().size()];
+    for (int d = 0; before != null && d < out.length; d++) {
+      for (int e = 0; e < out[d].length; e++) {
         int p = now.peak(d, e);
-        highest = Math.max(highest, p < 0 ? 0 : now.recovered().get(d)[p]);
+        int q = before.peak(d, e);
+        if (p >= 0 && q >= 0) {
+          double value = now.recovered().get(d)[p];
+          out[d][e] = value > 0 ? Math.abs(before.recovered().get(d)[q] / value - 1) : 0;
+        }
       }
-      for (int e = 0; e < electrodes; e++) {
+    }
+    return out;
+  }
+
+  private static double[][] uncertainties(Level now, double[][] change, double[][] earlier) {
+    double[][] out = new double[change.length][];
+    for (int d = 0; d < out.length; d++) {
+      double[] raw = now.raw().get(d);
+      double[] smooth = now.recovered().get(d);
+      out[d] = new double[change[d].length];
+      double highest = Arrays.stream(smooth).max().orElse(0);
+      for (int e = 0; e < out[d].length; e++) {
         int p = now.peak(d, e);
         out[d][e] = FLOOR;
         // A thousandth of the highest field is no peak anyone asks for.
-        if (p < 0 || now.recovered().get(d)[p] < 1e-3 * highest) {
-          continue;
-        }
-        double value = now.recovered().get(d)[p];
-        double raw = Math.abs(now.raw().get(d)[p] / value - 1);
-        if (before == null) {
-          out[d][e] = Math.max(FLOOR, 2 * raw);
-        } else {
-          int q = before.peak(d, e);
-          double change = Math.abs(before.recovered().get(d)[q] / value - 1);
-          out[d][e] = Math.max(FLOOR, Math.max(raw, change));
+        if (p >= 0 && smooth[p] > 1e-3 * highest) {
+          double before = earlier == null ? 0 : 0.25 * earlier[d][e];
+          double noise = Math.abs(raw[p] / smooth[p] - 1);
+          out[d][e] = Math.max(Math.max(FLOOR, noise), Math.max(change[d][e], before));
         }
       }
     }

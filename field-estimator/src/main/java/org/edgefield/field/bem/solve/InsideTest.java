@@ -33,8 +33,7 @@ final class InsideTest {
   }
 
   private double first(double x, double y, double z, double[] ray, Side side) {
-    boolean any =
-        cursor.ray(x, y, z, ray[0], ray[1], ray[2], 0, Double.POSITIVE_INFINITY, side);
+    boolean any = cursor.ray(x, y, z, ray[0], ray[1], ray[2], 0, Double.POSITIVE_INFINITY, side);
     return any ? cursor.distance() : Double.POSITIVE_INFINITY;
   }
 }

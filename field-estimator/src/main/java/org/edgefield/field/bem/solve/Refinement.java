@@ -4,8 +4,9 @@ import java.util.Arrays;
 import org.edgefield.importer.mesh.SurfaceMesh;
 
 /**
- * Where the next mesh should be finer: element widths are cut where the field of some duty comes near
- * the peak of its electrode, and where raw and recovered values part by more than the accuracy.
+ * Where the next mesh should be finer: element widths are cut where the field of some duty comes
+ * near the peak of its electrode, and where raw and recovered values part by more than the
+ * accuracy.
  */
 final class Refinement {
   private static final double NEAR_PEAK = 0.6;

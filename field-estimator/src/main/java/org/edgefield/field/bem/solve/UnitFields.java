@@ -11,8 +11,8 @@ import org.edgefield.field.parallel.Workers;
 import org.edgefield.importer.Progress;
 
 /**
- * Solved densities: one per electrode at 1 V with all others at 0 V, and one for the ambient field with
- * all at 0 V.
+ * Solved densities: one per electrode at 1 V with all others at 0 V, and one for the ambient field
+ * with all at 0 V.
  *
  * @param density per set, one value per unknown, V/m over 4 pi; the ambient set last where there is
  *     an ambient field

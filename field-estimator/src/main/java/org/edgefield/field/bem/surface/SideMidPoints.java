@@ -6,8 +6,8 @@ import org.edgefield.importer.brep.ExactGeometry;
 import org.edgefield.importer.mesh.SurfaceMesh;
 
 /**
- * Mid-points of the sides of a mesh on the exact surface: on CAD edges at the middle parameter, inside
- * faces at the foot of the chord's middle. Both triangles of a side get the same point.
+ * Mid-points of the sides of a mesh on the exact surface: on CAD edges at the middle parameter,
+ * inside faces at the foot of the chord's middle. Both triangles of a side get the same point.
  */
 public final class SideMidPoints {
   private SideMidPoints() {}
