@@ -62,8 +62,10 @@ static void spheroids(StepFolder& out) {
   out.write("prolate-5-askew.step", "prolate spheroid turned and shifted", "semi-axes 100 and 20", {piece(askew(p), "Prolate spheroid 5:1")});
   out.write("prolate-5-nurbs.step", "prolate spheroid as NURBS", "semi-axes 100 and 20", {piece(nurbs(p), "Prolate spheroid 5:1")});
   out.write("prolate-5-inch.step", "prolate spheroid in inches", "semi-axes 100 and 20", {piece(p, "Prolate spheroid 5:1")}, "INCH");
-  out.write("oblate-5.step", "oblate spheroid", "semi-axes 20 and 100", {piece(spheroid(20, 100, false), "Oblate spheroid 5:1")});
-  out.write("oblate-20.step", "disc-like oblate spheroid", "semi-axes 5 and 100", {piece(spheroid(5, 100, false), "Oblate spheroid 20:1")});
+  // NURBS, since a surface of revolution whose meridian is half an ellipse cut across its long axis comes back from
+  // STEP as the whole ellipse.
+  out.write("oblate-5.step", "oblate spheroid as NURBS", "semi-axes 20 and 100", {piece(nurbs(spheroid(20, 100, false)), "Oblate spheroid 5:1")});
+  out.write("oblate-20.step", "disc-like oblate spheroid as NURBS", "semi-axes 5 and 100", {piece(nurbs(spheroid(5, 100, false)), "Oblate spheroid 20:1")});
 }
 
 static void spherePairs(StepFolder& out) {

@@ -1,0 +1,2 @@
+/** Conductors in a uniform ambient field. */
+package org.edgefield.models.exact.ambient;

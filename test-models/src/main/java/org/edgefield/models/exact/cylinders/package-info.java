@@ -1,0 +1,2 @@
+/** Pairs of long cylinders. */
+package org.edgefield.models.exact.cylinders;

@@ -1,0 +1,2 @@
+/** Bodies alone in space, earth at infinity. */
+package org.edgefield.models.exact.isolated;

@@ -1,0 +1,2 @@
+/** Electrodes over an earthed plane. */
+package org.edgefield.models.exact.plane;

@@ -1,0 +1,2 @@
+/** Pairs of spheres. */
+package org.edgefield.models.exact.spheres;
