@@ -8,8 +8,8 @@ import org.edgefield.importer.mesh.size.VertexField;
 /**
  * Lowers sizes where CAD edges stand closer together than the size field wants elements: between
  * two vertices on CAD edges an edge cannot be collapsed, and a triangle with all three corners on
- * CAD edges cannot become higher. The size in that direction then has to follow the distance, for a
- * mesh of well-shaped elements in the field's own measure.
+ * CAD edges cannot become higher. The size in that direction then has to follow the distance, and
+ * the size along is limited by the largest aspect ratio.
  */
 final class CadLimits {
   /** Length in elements below which a distance between CAD edges limits the size. */
@@ -18,35 +18,45 @@ final class CadLimits {
   /** Smallest share to which a size is lowered; thinner slivers of the model stay slivers. */
   private static final double LEAST_SHARE = 1.0 / 64;
 
-  private CadLimits() {}
+  private final HalfEdgeMesh mesh;
+  private final VertexField field;
+  private final double maxAspect;
+  private final double[] wide = new double[Metric.STRIDE];
+  private final double[] work = new double[15];
+
+  CadLimits(HalfEdgeMesh mesh, VertexField field, double maxAspect) {
+    this.mesh = mesh;
+    this.field = field;
+    this.maxAspect = maxAspect;
+  }
 
   /**
    * Lowers sizes of constrained vertices.
    *
    * @return number of places where a size was lowered
    */
-  static int apply(HalfEdgeMesh mesh, VertexField field) {
+  int apply() {
     int count = 0;
     for (int t = 0; t < mesh.triangles; t++) {
       if (mesh.face[t] < 0) {
         continue;
       }
       for (int h = 3 * t; h < 3 * t + 3; h++) {
-        count += h < mesh.opp[h] ? limitEdge(mesh, field, h) : 0;
-        count += limitHeight(mesh, field, h);
+        count += h < mesh.opp[h] ? limitEdge(h) : 0;
+        count += limitHeight(h);
       }
     }
     return count;
   }
 
-  private static boolean fixed(HalfEdgeMesh mesh, int v) {
+  private boolean fixed(int v) {
     return mesh.kind[v] != SurfaceMesh.ON_FACE;
   }
 
-  private static int limitEdge(HalfEdgeMesh mesh, VertexField field, int h) {
+  private int limitEdge(int h) {
     int a = mesh.org[h];
     int b = mesh.dest(h);
-    if (!fixed(mesh, a) || !fixed(mesh, b)) {
+    if (!fixed(a) || !fixed(b)) {
       return 0;
     }
     boolean bothEnds =
@@ -56,21 +66,15 @@ final class CadLimits {
     }
     double[] x = mesh.xyz;
     return lower(
-        field,
-        x[3 * b] - x[3 * a],
-        x[3 * b + 1] - x[3 * a + 1],
-        x[3 * b + 2] - x[3 * a + 2],
-        a,
-        b,
-        -1);
+        x[3 * b] - x[3 * a], x[3 * b + 1] - x[3 * a + 1], x[3 * b + 2] - x[3 * a + 2], a, b, -1);
   }
 
   /** Height of the triangle over its CAD edge h. */
-  private static int limitHeight(HalfEdgeMesh mesh, VertexField field, int h) {
+  private int limitHeight(int h) {
     int a = mesh.org[h];
     int b = mesh.dest(h);
     int c = mesh.org[HalfEdgeMesh.prev(h)];
-    if (mesh.cad[h] < 0 || !fixed(mesh, c)) {
+    if (mesh.cad[h] < 0 || !fixed(c)) {
       return 0;
     }
     double[] x = mesh.xyz;
@@ -85,11 +89,10 @@ final class CadLimits {
       return 0;
     }
     boolean corner = mesh.cad[HalfEdgeMesh.next(h)] >= 0 || mesh.cad[HalfEdgeMesh.prev(h)] >= 0;
-    return corner ? 0 : lower(field, cx - f * ex, cy - f * ey, cz - f * ez, a, b, c);
+    return corner ? 0 : lower(cx - f * ex, cy - f * ey, cz - f * ez, a, b, c);
   }
 
-  private static int lower(
-      VertexField field, double dx, double dy, double dz, int a, int b, int c) {
+  private int lower(double dx, double dy, double dz, int a, int b, int c) {
     double d2 = dx * dx + dy * dy + dz * dz;
     if (!(d2 > 0)) {
       return 0;
@@ -105,6 +108,8 @@ final class CadLimits {
       if (square < TOO_SHORT * TOO_SHORT && square > LEAST_SHARE * LEAST_SHARE) {
         double d = Math.sqrt(d2);
         Metric.addOuter(field.metric, at, (1 - square) / d2, dx / d, dy / d, dz / d);
+        Metric.setIsotropic(wide, 0, maxAspect * d);
+        Metric.intersect(field.metric, at, wide, work);
         count++;
       }
     }

@@ -8,32 +8,33 @@ import org.edgefield.importer.brep.ExactGeometry;
  * start close by. The points returned are the surface's own at the parameters returned, however
  * near the steps came.
  */
-final class FacePoints {
+public final class FacePoints {
   private static final int STRIDE = 9;
 
   private final ExactGeometry geometry;
 
   /** Face per point. */
-  int[] face = new int[0];
+  public int[] face = new int[0];
 
   /** Point to come near to, 3 each. */
-  double[] target = new double[0];
+  public double[] target = new double[0];
 
   /** Parameters: start, then result; 2 each. */
-  double[] uv = new double[0];
+  public double[] uv = new double[0];
 
   /** Result: position and first derivatives, 9 each. */
-  double[] surface = new double[0];
+  public double[] surface = new double[0];
 
   private double[] trialUv = new double[0];
   private double[] trial = new double[0];
 
-  FacePoints(ExactGeometry geometry) {
+  /** Creates an empty set. */
+  public FacePoints(ExactGeometry geometry) {
     this.geometry = geometry;
   }
 
   /** Makes room for n points, keeping what is there. */
-  void ensure(int n) {
+  public void ensure(int n) {
     if (face.length < n) {
       int room = Math.max(n, 2 * face.length);
       face = Arrays.copyOf(face, room);
@@ -46,7 +47,7 @@ final class FacePoints {
   }
 
   /** Evaluates the first n points and takes some steps towards their targets. */
-  void settle(int n, int steps) {
+  public void settle(int n, int steps) {
     geometry.surface(n, face, uv, surface);
     for (int s = 0; s < steps; s++) {
       for (int i = 0; i < n; i++) {

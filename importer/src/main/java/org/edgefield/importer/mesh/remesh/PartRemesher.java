@@ -23,6 +23,9 @@ public final class PartRemesher {
   /** Share of triangles that may still change when the work counts as done. */
   private static final double SETTLED = 0.01;
 
+  /** Shape below which a triangle counts as flat. */
+  private static final double FLAT = 0.1;
+
   /** Triangles over the number wanted from which on they are thinned out. */
   private static final double CROWDED = 1.15;
 
@@ -71,7 +74,7 @@ public final class PartRemesher {
     w.refreshAll(false);
     Flipper.run(w);
     for (int pass = 0; pass < PASSES; pass++) {
-      int changes = splitAll() + collapseAll();
+      int changes = splitAll() + collapseAll() + repair();
       relax(2, 0.95);
       w.refreshAll(pass >= LIMITS_FROM);
       Flipper.run(w);
@@ -87,16 +90,18 @@ public final class PartRemesher {
 
   private int splitAll() {
     int total = 0;
+    Splitter.Choice choice = Splitter.Choice.OUTLINES;
     for (int round = 0; round < SPLIT_ROUNDS; round++) {
-      int n = splitter.round(false);
-      if (n == 0) {
-        n = splitter.round(true);
-      }
-      if (n == 0) {
-        break;
-      }
+      int n = splitter.round(choice);
       total += n;
       Flipper.run(w);
+      if (n > 0) {
+        choice = choice == Splitter.Choice.ALL ? Splitter.Choice.LONGEST : choice;
+      } else if (choice == Splitter.Choice.ALL) {
+        break;
+      } else {
+        choice = choice == Splitter.Choice.OUTLINES ? Splitter.Choice.LONGEST : Splitter.Choice.ALL;
+      }
     }
     return total;
   }
@@ -135,27 +140,37 @@ public final class PartRemesher {
     }
   }
 
+  /** Collapses flat and overturned triangles, whatever the lengths that leaves. */
+  private int repair() {
+    return collapseWorse(FLAT, Double.POSITIVE_INFINITY, 0);
+  }
+
   /** Works on the worst triangles alone: collapses whatever makes them better. */
   private void mend() {
     for (int round = 0; round < 3; round++) {
-      int n = 0;
-      for (int t = 0; t < w.mesh.triangles; t++) {
-        if (w.mesh.face[t] < 0 || w.shape(t) > 0.6) {
-          continue;
-        }
-        for (int h = 3 * t; h < 3 * t + 3; h++) {
-          if (collapser.tryCollapse(h, 1.7, 0.6)
-              || collapser.tryCollapse(w.mesh.opp[h], 1.7, 0.6)) {
-            n++;
-            break;
-          }
-        }
-      }
+      int n = collapseWorse(0.6, 1.7, 0.6) + repair();
       Flipper.run(w);
       relax(2, 0.7);
       if (n == 0) {
         break;
       }
     }
+  }
+
+  private int collapseWorse(double shape, double longest, double fair) {
+    int n = 0;
+    for (int t = 0; t < w.mesh.triangles; t++) {
+      if (w.mesh.face[t] < 0 || w.shape(t) > shape) {
+        continue;
+      }
+      for (int h = 3 * t; h < 3 * t + 3; h++) {
+        if (collapser.tryCollapse(h, longest, fair)
+            || collapser.tryCollapse(w.mesh.opp[h], longest, fair)) {
+          n++;
+          break;
+        }
+      }
+    }
+    return n;
   }
 }

@@ -38,8 +38,18 @@ final class Splitter {
     this.w = w;
   }
 
+  /** Which long edges a round takes. */
+  enum Choice {
+    /** Those on CAD edges, so that faces get their exact outline before points inside. */
+    OUTLINES,
+    /** Those that are about the longest of their triangles. */
+    LONGEST,
+    /** All. */
+    ALL
+  }
+
   /** One round; returns the number of splits. */
-  int round(boolean anyLong) {
+  int round(Choice choice) {
     HalfEdgeMesh mesh = w.mesh;
     measure();
     // A split renumbers the half-edges of its two triangles, so that each takes part in one only.
@@ -51,7 +61,9 @@ final class Splitter {
           && length[h] > LONG
           && !taken[h / 3]
           && !taken[mesh.opp[h] / 3]
-          && (anyLong || length[h] >= NEARLY_LONGEST * longestBeside(h))) {
+          && (choice == Choice.OUTLINES
+              ? mesh.cad[h] >= 0
+              : choice == Choice.ALL || length[h] >= NEARLY_LONGEST * longestBeside(h))) {
         if (n == list.length) {
           list = Arrays.copyOf(list, 2 * n);
         }

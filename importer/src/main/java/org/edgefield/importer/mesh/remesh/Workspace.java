@@ -103,7 +103,7 @@ final class Workspace {
     }
     sizes.refresh(mesh, field, all, n);
     grading.spread(mesh, field, null, 0);
-    if (limits && CadLimits.apply(mesh, field) > 0) {
+    if (limits && new CadLimits(mesh, field, sizes.maxAspect()).apply() > 0) {
       grading.spread(mesh, field, null, 0);
     }
     markAll();

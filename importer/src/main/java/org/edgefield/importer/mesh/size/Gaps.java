@@ -8,9 +8,9 @@ import org.edgefield.importer.mesh.spatial.TriangleCursor;
 import org.edgefield.importer.mesh.spatial.TriangleTree;
 
 /**
- * Distances between parts, measured on a first triangulation. Parts that touch are bolted or
- * pressed together and one conductor: the gap between them, which falls to nothing along the rim of
- * the contact, does not count.
+ * Distances between parts, measured on a first triangulation. Parts that touch or overlap are
+ * bolted or pressed together and one conductor: the gap between them, which falls to nothing along
+ * the rim of the contact, does not count.
  */
 public final class Gaps {
   /** Parts nearer than this share of the smaller one's size touch. */
@@ -72,6 +72,26 @@ public final class Gaps {
           cursor.allow(counts[i]);
         }
       }
+      for (int k = 0; k < 3; k++) {
+        dropCrossed(cursor, p, v[k], v[(k + 1) % 3], i);
+      }
+    }
+  }
+
+  /** Parts that a triangle side of part i runs through overlap it. */
+  private void dropCrossed(TriangleCursor cursor, double[] p, int a, int b, int i) {
+    double dx = p[3 * b] - p[3 * a];
+    double dy = p[3 * b + 1] - p[3 * a + 1];
+    double dz = p[3 * b + 2] - p[3 * a + 2];
+    double length = Math.sqrt(dx * dx + dy * dy + dz * dz);
+    cursor.allow(counts[i]);
+    while (length > 0
+        && cursor.ray(
+            p[3 * a], p[3 * a + 1], p[3 * a + 2], dx, dy, dz, 0, length, TriangleCursor.Side.ANY)) {
+      int j = cursor.group();
+      counts[i][j] = false;
+      counts[j][i] = false;
+      cursor.allow(counts[i]);
     }
   }
 

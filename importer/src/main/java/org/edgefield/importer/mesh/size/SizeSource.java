@@ -100,9 +100,9 @@ public final class SizeSource {
     rows = own.isEmpty() ? null : new EdgeRows(geometry, own);
   }
 
-  /** Largest size asked for, metres. */
-  public double largest_m() {
-    return largest;
+  /** Largest ratio of sizes along and across. */
+  public double maxAspect() {
+    return settings.maxAspect();
   }
 
   /**
