@@ -99,8 +99,7 @@ public final class CaseBinding {
 
   private List<Integer> matching(Text pattern) {
     Glob glob = new Glob(pattern.value());
-    List<Integer> found =
-        parts.stream().filter(glob::matches).map(Part::index).toList();
+    List<Integer> found = parts.stream().filter(glob::matches).map(Part::index).toList();
     if (found.isEmpty()) {
       List<String> known =
           parts.stream().flatMap(p -> Stream.of(p.name(), p.path())).distinct().toList();

@@ -187,8 +187,7 @@ public final class CaseReader {
                     .names()
                     .forEach(
                         (pattern, value) ->
-                            radius(value)
-                                .ifPresent(r -> perPart.add(new PartRadius(pattern, r)))));
+                            radius(value).ifPresent(r -> perPart.add(new PartRadius(pattern, r)))));
     map.refuseOthers();
     return edges(radius.flatMap(this::radius).orElse(null), perPart);
   }
@@ -233,8 +232,7 @@ public final class CaseReader {
                       .forEach(
                           (electrode, value) ->
                               voltage(value)
-                                  .ifPresent(
-                                      p -> voltages.add(new VoltageEntry(electrode, p)))));
+                                  .ifPresent(p -> voltages.add(new VoltageEntry(electrode, p)))));
       map.refuseOthers();
       if (name.isEmpty()) {
         continue;
@@ -307,7 +305,8 @@ public final class CaseReader {
       String hint =
           Nearest.to(name, kinds.keySet())
               .map(n -> "; did you mean \"" + n + "\"?")
-              .orElse("; electrodes: " + String.join(", ", kinds.keySet().stream().sorted().toList()));
+              .orElse(
+                  "; electrodes: " + String.join(", ", kinds.keySet().stream().sorted().toList()));
       problems.add(v.electrode().place(), "there is no electrode \"" + name + '"' + hint);
     } else if (kind == Electrode.Kind.EARTH && v.voltage().peak_V() != 0) {
       problems.add(v.electrode().place(), "electrode \"" + name + "\" is earth: it has no voltage");
@@ -330,7 +329,8 @@ public final class CaseReader {
             .orElse(Permitted.Criterion.FIXED);
     if (criterion != Permitted.Criterion.FIXED && map.has("field")) {
       problems.add(
-          map.placeOf("field"), "\"field\" belongs to criterion fixed; here the law sets the field");
+          map.placeOf("field"),
+          "\"field\" belongs to criterion fixed; here the law sets the field");
     }
     Permitted permitted =
         new Permitted(

@@ -10,6 +10,8 @@ import java.util.concurrent.CancellationException;
 import org.edgefield.cli.ExitCode;
 import org.edgefield.cli.UserException;
 import org.edgefield.cli.console.Console;
+import org.edgefield.field.bem.solve.SolveException;
+import org.edgefield.field.gas.GasException;
 import org.edgefield.importer.ModelException;
 import picocli.CommandLine;
 import picocli.CommandLine.Help.Ansi;
@@ -79,6 +81,14 @@ public final class CommandLineRun {
     }
     if (e instanceof ModelException model) {
       say(model.getMessage());
+      return ExitCode.MODEL;
+    }
+    if (e instanceof GasException) {
+      say(e.getMessage());
+      return ExitCode.USAGE;
+    }
+    if (e instanceof SolveException) {
+      say(e.getMessage());
       return ExitCode.MODEL;
     }
     if (e instanceof OutOfMemoryError) {

@@ -20,6 +20,7 @@ import picocli.CommandLine.Spec;
       "  edgefield parts compartment.step              what is in the model",
       "  edgefield draft compartment.step              a starter case file",
       "  edgefield screen compartment.yaml             hot spots in seconds, with a heatmap",
+      "  edgefield solve compartment.yaml              the true field, to 1 %",
       "  edgefield gate compartment.yaml --accepted accepted.json",
       "                                                fail on new or worse red regions",
       ""
@@ -63,6 +64,10 @@ final class RootCommand implements Runnable {
   }
 
   static CommandLine commandLine(Console console) {
-    return new CommandLine(new RootCommand());
+    return new CommandLine(new RootCommand())
+        .addSubcommand(new PartsCommand(console))
+        .addSubcommand(new DraftCommand(console))
+        .addSubcommand(new ScreenCommand(console))
+        .addSubcommand(new SolveCommand(console));
   }
 }

@@ -20,7 +20,8 @@ public record Phasor(double real_V, double imaginary_V) {
    */
   public static Phasor parse(String text) throws QuantityException {
     int at = text.indexOf('@');
-    double amplitude = amplitude((at < 0 ? text : text.substring(0, at)).strip(), Dimension.VOLTAGE);
+    double amplitude =
+        amplitude((at < 0 ? text : text.substring(0, at)).strip(), Dimension.VOLTAGE);
     if (at < 0) {
       return new Phasor(amplitude, 0);
     }

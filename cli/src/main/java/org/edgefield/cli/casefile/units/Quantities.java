@@ -36,8 +36,7 @@ public final class Quantities {
     double si;
     if (symbol.isEmpty()) {
       if (expected != Dimension.RATIO) {
-        throw new QuantityException(
-            quoted(text) + " has no unit; expected " + wanted(expected));
+        throw new QuantityException(quoted(text) + " has no unit; expected " + wanted(expected));
       }
       si = value;
     } else {
@@ -65,11 +64,7 @@ public final class Quantities {
     }
     if (unit.get().dimension() != expected) {
       throw new QuantityException(
-          quoted(text)
-              + " is "
-              + unit.get().dimension().text()
-              + "; expected "
-              + wanted(expected));
+          quoted(text) + " is " + unit.get().dimension().text() + "; expected " + wanted(expected));
     }
     return unit.get();
   }

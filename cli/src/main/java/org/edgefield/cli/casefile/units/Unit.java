@@ -39,6 +39,8 @@ enum Unit {
   private final Dimension dimension;
   private final double factor;
   private final double offset;
+  // Made by List.of, so it never changes.
+  @SuppressWarnings("ImmutableEnumChecker")
   private final List<String> symbols;
 
   Unit(Dimension dimension, double factor, String... symbols) {

@@ -111,8 +111,7 @@ public final class YamlMap {
         return value;
       }
       problems.add(
-          text.get().place(),
-          quoted(key) + " must be " + bounds + ", not " + text.get().value());
+          text.get().place(), quoted(key) + " must be " + bounds + ", not " + text.get().value());
     } catch (QuantityException e) {
       problems.add(text.get().place(), quoted(key) + ": " + e.getMessage());
     }
@@ -170,7 +169,8 @@ public final class YamlMap {
     }
     if (!(node.get() instanceof SequenceNode sequence)) {
       problems.add(
-          YamlText.place(node.get()), quoted(key) + " must be a list: start each entry with \"- \"");
+          YamlText.place(node.get()),
+          quoted(key) + " must be a list: start each entry with \"- \"");
       return List.of();
     }
     return sequence.getValue().stream().map(n -> of(n, itemWhat, problems)).toList();

@@ -39,8 +39,7 @@ public final class YamlText {
     }
     if (root == null) {
       root =
-          new MappingNode(
-              Tag.MAP, true, new java.util.ArrayList<>(), null, null, FlowStyle.BLOCK);
+          new MappingNode(Tag.MAP, true, new java.util.ArrayList<>(), null, null, FlowStyle.BLOCK);
     }
     return YamlMap.of(root, "the case file", problems);
   }
