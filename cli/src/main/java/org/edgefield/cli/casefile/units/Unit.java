@@ -39,6 +39,7 @@ enum Unit {
   private final Dimension dimension;
   private final double factor;
   private final double offset;
+
   // Made by List.of, so it never changes.
   @SuppressWarnings("ImmutableEnumChecker")
   private final List<String> symbols;
