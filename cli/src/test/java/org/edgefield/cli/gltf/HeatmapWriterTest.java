@@ -43,15 +43,17 @@ final class HeatmapWriterTest {
     GlbReader glb = new GlbReader(scene.glb());
     double[] field = scene.result().duties().get(0).field().field_V_per_m();
     double most = 0;
+    double worst = 0;
     for (String name : List.of("Busbar L1", "Busbar L2", "Busbar L3", "Schirm", "Housing")) {
       JsonNode primitive = glb.primitive(glb.node(name), 0);
       double[] ratio = glb.attribute(primitive, "_UTILISATION");
       double[] strength = glb.attribute(primitive, "_FIELD_V_PER_M");
       for (int i = 0; i < ratio.length; i++) {
-        assertThat(ratio[i]).isCloseTo(strength[i] / 3e6, within(1e-6));
+        worst = Math.max(worst, Math.abs(ratio[i] - strength[i] / 3e6));
         most = Math.max(most, strength[i]);
       }
     }
+    assertThat(worst).isLessThan(1e-6);
     assertThat(most).isCloseTo(Arrays.stream(field).max().orElseThrow(), within(1.0));
     JsonNode insulator = glb.primitive(glb.node("Insulator"), 0);
     assertThat(insulator.get("attributes").has("_UTILISATION")).isFalse();
@@ -68,6 +70,7 @@ final class HeatmapWriterTest {
     JsonNode ball = glb.primitive(glb.node("Schirm"), 0);
     JsonNode mappings = ball.get("extensions").get("KHR_materials_variants").get("mappings");
     int[] families = new int[3];
+    int off = 0;
     for (int d = 0; d < 3; d++) {
       int duty = d;
       JsonNode mapping =
@@ -93,12 +96,13 @@ final class HeatmapWriterTest {
         for (int shift = 0; shift <= 16; shift += 8) {
           // A texel is 0.001 wide; only at a limit can that change a colour by more than 1.
           if (Math.abs(ratio[i] - 0.8) > 0.001 && Math.abs(ratio[i] - 1) > 0.001) {
-            assertThat((shown >> shift) & 0xff).isCloseTo((wanted >> shift) & 0xff, within(1));
+            off = Math.max(off, Math.abs(((shown >> shift) & 0xff) - ((wanted >> shift) & 0xff)));
           }
         }
         families[d] |= ratio[i] >= 1 ? 4 : ratio[i] >= 0.8 ? 2 : 1;
       }
     }
+    assertThat(off).isLessThanOrEqualTo(1);
     // The sample covers calm, amber and red between its duties.
     assertThat(families[0] | families[1] | families[2]).isEqualTo(7);
   }

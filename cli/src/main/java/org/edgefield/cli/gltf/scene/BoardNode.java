@@ -15,9 +15,9 @@ final class BoardNode {
   private static final double GAP_OF_DEPTH = 0.5 * Math.tan(Math.toRadians(30));
 
   /** Smallest and largest height as a share of the model's diagonal. */
-  private static final double LOWEST = 0.45;
+  private static final double LOWEST = 0.5;
 
-  private static final double HIGHEST = 0.62;
+  private static final double HIGHEST = 0.72;
 
   private BoardNode() {}
 
@@ -30,7 +30,7 @@ final class BoardNode {
    */
   static void add(SceneTree tree, Materials materials, Box model, int[] image, int rows) {
     double diagonal = model.diagonal();
-    double high = Math.max(LOWEST * diagonal, Math.min(HIGHEST * diagonal, 1.1 * model.size(1)));
+    double high = Math.max(LOWEST * diagonal, Math.min(HIGHEST * diagonal, 1.15 * model.size(1)));
     double wide = high * Board.WIDTH / rows;
     double left = model.high[0] + Math.max(GAP * diagonal, GAP_OF_DEPTH * model.size(2));
     double bottom = model.centre(1) - high / 2;

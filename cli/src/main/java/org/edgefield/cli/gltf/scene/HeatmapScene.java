@@ -47,7 +47,8 @@ public final class HeatmapScene {
     List<String> names = Arrays.stream(shown).mapToObj(d -> job.duties().get(d).name()).toList();
     int governing = governing(duties);
     account(glb, assembly, job, result, stamp, shown, governing);
-    SceneTree tree = new SceneTree(glb, assembly.source().file() + " - edgefield heatmap");
+    SceneTree tree =
+        new SceneTree(glb, Words.fileName(assembly.source().file()) + " - edgefield heatmap");
     Materials materials = new Materials(glb, names, governing, scale);
 
     SurfaceMesh mesh = result.mesh();
@@ -185,7 +186,7 @@ public final class HeatmapScene {
     extras.put("date", stamp.date().toString());
     extras
         .putObject("input")
-        .put("file", assembly.source().file())
+        .put("file", Words.fileName(assembly.source().file()))
         .put("sha256", assembly.source().sha256())
         .put("unit", assembly.source().unit());
     extras

@@ -62,7 +62,9 @@ final class LegendBoard {
     Board board = new Board();
     board.line("Electric field heatmap", TITLE, Board.INK);
     board.line(
-        assembly.source().file() + " (" + assembly.source().unit() + ")", SMALL, Board.FAINT);
+        Words.fileName(assembly.source().file()) + " (" + assembly.source().unit() + ")",
+        SMALL,
+        Board.FAINT);
     board.skip(18);
     Duty duty = job.duties().get(index);
     String count =
@@ -98,9 +100,7 @@ final class LegendBoard {
     int height = 82;
     board.canvas().fill(Board.MARGIN, board.y(), Board.WIDTH - 2 * Board.MARGIN, height, ground);
     String word = red ? "RED" : amber ? "AMBER" : "PASS";
-    String text =
-        String.format(
-            Locale.ROOT, "%s   peak %s of permitted", word, Words.utilisation(peak) + " x");
+    String text = word + "   peak " + Words.utilisation(peak) + " times permitted";
     board.canvas().text(text, Board.MARGIN + 24.0, board.y() + 58, 34, red ? WHITE : Board.INK);
     board.skip(height);
   }
@@ -204,7 +204,7 @@ final class LegendBoard {
             case LIVE ->
                 Words.voltage(Math.hypot(duty.real_V()[e], duty.imaginary_V()[e])) + " peak";
           };
-      text.add(electrode.name() + " " + level);
+      text.add(electrode.name() + ": " + level);
     }
     return text.toString();
   }

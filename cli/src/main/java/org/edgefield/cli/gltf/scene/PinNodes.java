@@ -18,7 +18,7 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  */
 final class PinNodes {
   /** Pins per duty; the rest of the hot spots is in the result file. */
-  static final int MOST = 40;
+  static final int MOST = 20;
 
   /** Edge length of a lantern as a share of the scene's diagonal. */
   static final double HEAD = 0.03;

@@ -41,6 +41,11 @@ final class Words {
     return String.format(Locale.ROOT, "%.2f", rounded / 100);
   }
 
+  /** A file's name without its folders: a heatmap that is passed on tells nothing of them. */
+  static String fileName(String path) {
+    return path.substring(Math.max(path.lastIndexOf('/'), path.lastIndexOf('\\')) + 1);
+  }
+
   /** Where a hot spot is: "rounded edge R2 of Busbar L1". */
   static String place(HotSpot spot, Part part) {
     return spot.feature() + " of " + part.name();

@@ -5,7 +5,11 @@ import org.edgefield.cli.colour.Srgb;
 
 /** A small image to draw rectangles and stroke text on; pixels from the top left. */
 public final class Canvas {
-  private static final double PEN = 0.13;
+  private static final double PEN = 0.15;
+
+  /** Shades of a rim; few, so that the picture packs well. */
+  private static final double SHADES = 10;
+
   private final int width;
   private final int height;
   private final int[] rgb;
@@ -79,7 +83,7 @@ public final class Canvas {
         double cover = 0.5 + radius - distance(lines, x + 0.5, y + 0.5);
         if (cover > 0) {
           int at = y * width + x;
-          rgb[at] = Srgb.mix(rgb[at], colour, Math.min(1, cover));
+          rgb[at] = Srgb.mix(rgb[at], colour, Math.min(1, Math.rint(SHADES * cover) / SHADES));
         }
       }
     }
