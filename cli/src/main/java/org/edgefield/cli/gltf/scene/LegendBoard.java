@@ -100,7 +100,7 @@ final class LegendBoard {
     int height = 82;
     board.canvas().fill(Board.MARGIN, board.y(), Board.WIDTH - 2 * Board.MARGIN, height, ground);
     String word = red ? "RED" : amber ? "AMBER" : "PASS";
-    String text = word + "   peak " + Words.utilisation(peak) + " times permitted";
+    String text = word + "   peak " + Words.utilisation(peak) + " x permitted";
     board.canvas().text(text, Board.MARGIN + 24.0, board.y() + 58, 34, red ? WHITE : Board.INK);
     board.skip(height);
   }

@@ -34,8 +34,11 @@ final class Words {
     return (text.contains(".") ? text.replaceAll("0+$", "").replaceAll("\\.$", "") : text) + " kV";
   }
 
-  /** A utilisation: two decimals, rounded so that a limit is not crossed by rounding. */
+  /** A utilisation: two decimals below ten, cut and not rounded below 1 so that it stays below. */
   static String utilisation(double utilisation) {
+    if (utilisation >= 10) {
+      return digits(utilisation, 3);
+    }
     double hundredths = 100 * utilisation;
     double rounded = utilisation < 1 ? Math.floor(hundredths) : Math.rint(hundredths);
     return String.format(Locale.ROOT, "%.2f", rounded / 100);

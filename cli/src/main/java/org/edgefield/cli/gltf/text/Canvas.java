@@ -54,56 +54,87 @@ public final class Canvas {
     }
   }
 
+  /**
+   * Draws the strokes of one glyph. A pixel takes the most that any stroke covers of it, so that
+   * crossing strokes do not darken its rim twice.
+   */
   private void glyph(
       float[][] strokes, double left, double base, double scale, double radius, int colour) {
-    double x0 = Double.POSITIVE_INFINITY;
-    double y0 = Double.POSITIVE_INFINITY;
-    double x1 = Double.NEGATIVE_INFINITY;
-    double y1 = Double.NEGATIVE_INFINITY;
-    double[][] lines = new double[strokes.length][];
-    for (int s = 0; s < strokes.length; s++) {
-      lines[s] = new double[strokes[s].length];
-      for (int i = 0; i < strokes[s].length; i += 2) {
-        double x = left + strokes[s][i] * scale;
-        double y = base - strokes[s][i + 1] * scale;
-        lines[s][i] = x;
-        lines[s][i + 1] = y;
-        x0 = Math.min(x0, x);
-        x1 = Math.max(x1, x);
-        y0 = Math.min(y0, y);
-        y1 = Math.max(y1, y);
+    Cover cover = new Cover(strokes, left, base, scale, radius + 1);
+    for (float[] p : strokes) {
+      for (int i = 0; i + 3 < p.length; i += 2) {
+        cover.add(
+            left + p[i] * scale,
+            base - p[i + 1] * scale,
+            left + p[i + 2] * scale,
+            base - p[i + 3] * scale,
+            radius);
       }
     }
-    int fromX = Math.max(0, (int) Math.floor(x0 - radius - 1));
-    int toX = Math.min(width - 1, (int) Math.ceil(x1 + radius + 1));
-    int fromY = Math.max(0, (int) Math.floor(y0 - radius - 1));
-    int toY = Math.min(height - 1, (int) Math.ceil(y1 + radius + 1));
-    for (int y = fromY; y <= toY; y++) {
-      for (int x = fromX; x <= toX; x++) {
-        double cover = 0.5 + radius - distance(lines, x + 0.5, y + 0.5);
-        if (cover > 0) {
-          int at = y * width + x;
-          rgb[at] = Srgb.mix(rgb[at], colour, Math.min(1, Math.rint(SHADES * cover) / SHADES));
+    for (int row = 0; row < cover.high; row++) {
+      for (int column = 0; column < cover.wide; column++) {
+        double share = Math.rint(SHADES * cover.share[row * cover.wide + column]) / SHADES;
+        int x = cover.left + column;
+        int y = cover.top + row;
+        if (share > 0 && x >= 0 && x < width && y >= 0 && y < height) {
+          rgb[y * width + x] = Srgb.mix(rgb[y * width + x], colour, share);
         }
       }
     }
   }
 
-  private static double distance(double[][] lines, double x, double y) {
-    double least = Double.POSITIVE_INFINITY;
-    for (double[] p : lines) {
-      for (int i = 0; i + 3 < p.length; i += 2) {
-        double dx = p[i + 2] - p[i];
-        double dy = p[i + 3] - p[i + 1];
-        double length2 = dx * dx + dy * dy;
-        double t = length2 == 0 ? 0 : ((x - p[i]) * dx + (y - p[i + 1]) * dy) / length2;
-        double clamped = Math.max(0, Math.min(1, t));
-        double ex = x - p[i] - clamped * dx;
-        double ey = y - p[i + 1] - clamped * dy;
-        least = Math.min(least, ex * ex + ey * ey);
+  /** Share of each pixel that a glyph covers. */
+  private static final class Cover {
+    final int left;
+    final int top;
+    final int wide;
+    final int high;
+    final float[] share;
+
+    Cover(float[][] strokes, double left, double base, double scale, double margin) {
+      double x0 = Double.POSITIVE_INFINITY;
+      double y0 = Double.POSITIVE_INFINITY;
+      double x1 = Double.NEGATIVE_INFINITY;
+      double y1 = Double.NEGATIVE_INFINITY;
+      for (float[] p : strokes) {
+        for (int i = 0; i < p.length; i += 2) {
+          x0 = Math.min(x0, left + p[i] * scale);
+          x1 = Math.max(x1, left + p[i] * scale);
+          y0 = Math.min(y0, base - p[i + 1] * scale);
+          y1 = Math.max(y1, base - p[i + 1] * scale);
+        }
+      }
+      this.left = (int) Math.floor(x0 - margin);
+      this.top = (int) Math.floor(y0 - margin);
+      this.wide = (int) Math.ceil(x1 + margin) - this.left + 1;
+      this.high = (int) Math.ceil(y1 + margin) - this.top + 1;
+      this.share = new float[wide * high];
+    }
+
+    /** Adds a straight stroke with round ends. */
+    void add(double ax, double ay, double bx, double by, double radius) {
+      double dx = bx - ax;
+      double dy = by - ay;
+      double length2 = dx * dx + dy * dy;
+      double reach = radius + 1;
+      int fromX = (int) Math.floor(Math.min(ax, bx) - reach);
+      int toX = (int) Math.ceil(Math.max(ax, bx) + reach);
+      int fromY = (int) Math.floor(Math.min(ay, by) - reach);
+      int toY = (int) Math.ceil(Math.max(ay, by) + reach);
+      for (int y = fromY; y <= toY; y++) {
+        for (int x = fromX; x <= toX; x++) {
+          double px = x + 0.5 - ax;
+          double py = y + 0.5 - ay;
+          double along = length2 == 0 ? 0 : (px * dx + py * dy) / length2;
+          double t = Math.max(0, Math.min(1, along));
+          double ex = px - t * dx;
+          double ey = py - t * dy;
+          double covered = Math.min(1, 0.5 + radius - Math.sqrt(ex * ex + ey * ey));
+          int at = (y - top) * wide + x - left;
+          share[at] = Math.max(share[at], (float) covered);
+        }
       }
     }
-    return Math.sqrt(least);
   }
 
   /** The image as PNG. */

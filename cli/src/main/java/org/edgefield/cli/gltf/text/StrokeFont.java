@@ -240,7 +240,7 @@ public final class StrokeFont {
         stroke[2 * i] = points[i].charAt(0) - '0';
         stroke[2 * i + 1] = points[i].charAt(1) - '0' - BASE_LINE;
       }
-      out[s] = smooth ? cutCorners(cutCorners(cutCorners(stroke))) : stroke;
+      out[s] = smooth ? cutCorners(cutCorners(stroke)) : stroke;
     }
     return out;
   }
