@@ -43,6 +43,7 @@ public final class HalfEdgeBuilder {
     b.pairHalves();
     b.markCadEdges();
     b.markPoles();
+    b.findSigns();
     b.checkFans();
     return new Built(b.mesh, b.original);
   }
@@ -231,6 +232,29 @@ public final class HalfEdgeBuilder {
     }
     for (int t = 0; t < mesh.triangles; t++) {
       mesh.settlePole(t);
+    }
+  }
+
+  /** Compares the outward normal with the one of the parameters, at one corner per face. */
+  private void findSigns() {
+    mesh.firstFace = part.firstFace();
+    mesh.faceSign = new byte[part.faceCount()];
+    double[] surface = new double[9];
+    double[] curvature = new double[ExactGeometry.CURVATURE_STRIDE];
+    for (int h = 0; h < 3 * mesh.triangles; h++) {
+      int f = mesh.face[h / 3];
+      if (mesh.faceSign[f - mesh.firstFace] != 0 || mesh.pole[h] != 0) {
+        continue;
+      }
+      int[] at = {f};
+      double[] uv = {mesh.uv[2 * h], mesh.uv[2 * h + 1]};
+      geometry.surface(1, at, uv, surface);
+      geometry.curvature(1, at, uv, curvature);
+      double dot =
+          curvature[0] * (surface[4] * surface[8] - surface[5] * surface[7])
+              + curvature[1] * (surface[5] * surface[6] - surface[3] * surface[8])
+              + curvature[2] * (surface[3] * surface[7] - surface[4] * surface[6]);
+      mesh.faceSign[f - mesh.firstFace] = (byte) Math.signum(dot);
     }
   }
 

@@ -65,6 +65,12 @@ public final class HalfEdgeMesh {
   /** CAD face per triangle, -1 for dead triangles. */
   public int[] face;
 
+  /** First face of the part: its index in {@link #faceSign} is 0. */
+  public int firstFace;
+
+  /** 1 per face where a triangle that faces outwards runs anticlockwise in (u, v), else -1. */
+  public byte[] faceSign = new byte[0];
+
   private int[] freeTriangles = new int[16];
   private int freeTriangleCount;
 

@@ -10,7 +10,7 @@ final class Flipper {
   /** Shape from which on a pair of triangles is left alone. */
   private static final double GOOD = 0.93;
 
-  /** Least gain, so that rounding does not turn an edge to and fro. */
+  /** Least gain as a share, so that rounding does not turn an edge to and fro. */
   private static final double GAIN = 1e-3;
 
   private Flipper() {}
@@ -62,12 +62,13 @@ final class Flipper {
     if (before > GOOD) {
       return false;
     }
+    double least = before + GAIN * Math.abs(before);
     double first = Shape.of(mesh, field, a, d, c, h, hd, hc);
-    if (first <= before + GAIN) {
+    if (first <= least) {
       return false;
     }
     double second = Shape.of(mesh, field, b, c, d, o, hc, hd);
-    if (second <= before + GAIN || mesh.find(c, d) >= 0) {
+    if (second <= least || mesh.find(c, d) >= 0) {
       return false;
     }
     mesh.flip(h);

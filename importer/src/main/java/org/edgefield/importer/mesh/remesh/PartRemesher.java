@@ -24,7 +24,7 @@ public final class PartRemesher {
   private static final double SETTLED = 0.01;
 
   /** Shape below which a triangle counts as flat. */
-  private static final double FLAT = 0.1;
+  private static final double FLAT = 1e-3;
 
   /** Triangles over the number wanted from which on they are thinned out. */
   private static final double CROWDED = 1.15;

@@ -7,8 +7,9 @@ import org.edgefield.importer.mesh.size.VertexField;
 /**
  * Shape of triangles in the mean of the size tensors of their corners: 4 sqrt(3) area / sum of
  * squared sides, 1 for an equilateral triangle, 0 for a flat one. A triangle that does not face
- * along the outward normals of its corners gets a negative value instead, the lower the worse, so
- * that every operation that raises the least value also turns triangles the right way.
+ * along the outward normals of its corners, or is folded over in the parameters of its face, gets a
+ * negative value instead, the lower the worse, so that every operation that raises the least value
+ * also turns triangles the right way.
  */
 final class Shape {
   /** Least cosine between a triangle's normal and the surface normals at its corners. */
@@ -27,6 +28,9 @@ final class Shape {
   static double of(
       HalfEdgeMesh mesh, VertexField field, int a, int b, int c, int ha, int hb, int hc) {
     double facing = facing(mesh, a, b, c, ha, hb, hc);
+    if (!unfolded(mesh, ha, hb, hc)) {
+      return Math.min(facing, 0) - 1 - LEAST_FACING;
+    }
     return facing < LEAST_FACING ? facing - LEAST_FACING : inMetric(mesh, field, a, b, c);
   }
 
@@ -34,6 +38,25 @@ final class Shape {
   static double ofTriangle(HalfEdgeMesh mesh, VertexField field, int t) {
     int h = 3 * t;
     return of(mesh, field, mesh.org[h], mesh.org[h + 1], mesh.org[h + 2], h, h + 1, h + 2);
+  }
+
+  /**
+   * Whether a triangle runs the right way round in the parameters of its face. A first mesh whose
+   * chords are longer than a fillet is wide may face anywhere in space, yet is sound there.
+   */
+  static boolean unfolded(HalfEdgeMesh mesh, int ha, int hb, int hc) {
+    return mesh.pole[ha] != 0
+        || mesh.pole[hb] != 0
+        || mesh.pole[hc] != 0
+        || turn(mesh, ha, mesh.uv, 2 * ha, 2 * hb, 2 * hc) >= 0;
+  }
+
+  /** Twice the area in parameters of the corners at three places, positive the right way round. */
+  static double turn(HalfEdgeMesh mesh, int h, double[] mid, int a, int b, int c) {
+    double area =
+        (mid[b] - mid[a]) * (mid[c + 1] - mid[a + 1])
+            - (mid[b + 1] - mid[a + 1]) * (mid[c] - mid[a]);
+    return area * mesh.faceSign[mesh.face[h / 3] - mesh.firstFace];
   }
 
   /** Least cosine between the triangle's normal and the corner normals; -1 where it has no area. */

@@ -23,6 +23,9 @@ final class Splitter {
 
   private static final int STEPS = 3;
 
+  /** Edges per split from which on a round counts as refused. */
+  private static final int REFUSED = 20;
+
   private final Workspace w;
   private double[] length = new double[0];
   private int[] list = new int[64];
@@ -31,6 +34,7 @@ final class Splitter {
   private double[] curveT = new double[64];
   private double[] curve = new double[6 * 64];
   private final double[] corners = new double[10];
+  private final double[] around = new double[8];
   private final double[] t1 = new double[1];
   private final double[] uv1 = new double[2];
 
@@ -72,7 +76,9 @@ final class Splitter {
         taken[mesh.opp[h] / 3] = true;
       }
     }
-    return n == 0 ? 0 : split(n);
+    // A round that is refused almost everywhere would go on for ever in small steps.
+    int made = n == 0 ? 0 : split(n);
+    return made * REFUSED < n ? 0 : made;
   }
 
   private void measure() {
@@ -266,23 +272,40 @@ final class Splitter {
     int hp = HalfEdgeMesh.prev(h);
     int on = HalfEdgeMesh.next(o);
     int op = HalfEdgeMesh.prev(o);
-    if (Shape.facing(mesh, a, m, c, h, h, hp) < before
-        || Shape.facing(mesh, m, b, c, hn, hn, hp) < before
-        || Shape.facing(mesh, b, m, d, o, o, op) < before
-        || Shape.facing(mesh, m, a, d, on, on, op) < before) {
-      mesh.vertices--;
-      return -1;
-    }
     for (int s = 0; s < 2; s++) {
       int point = onCurve ? 2 * i + s : 2 * i;
       corners[5 * s] = points.uv[2 * point];
       corners[5 * s + 1] = points.uv[2 * point + 1];
       Arrays.fill(corners, 5 * s + 2, 5 * s + 5, 0);
     }
+    boolean faces =
+        Shape.facing(mesh, a, m, c, h, h, hp) >= before
+            && Shape.facing(mesh, m, b, c, hn, hn, hp) >= before
+            && Shape.facing(mesh, b, m, d, o, o, op) >= before
+            && Shape.facing(mesh, m, a, d, on, on, op) >= before;
+    if (!faces && !(unfolded(h, 0) && unfolded(o, 5))) {
+      mesh.vertices--;
+      return -1;
+    }
     field.ensure(mesh.vertices);
     field.target[m] = 2 / (1 / field.target[a] + 1 / field.target[b]);
     mesh.split(h, m, corners, onCurve ? curveT[i] : 0);
     return m;
+  }
+
+  /** Whether both halves of h's triangle run the right way round in the parameters. */
+  private boolean unfolded(int h, int corner) {
+    HalfEdgeMesh mesh = w.mesh;
+    int n = HalfEdgeMesh.next(h);
+    int p = HalfEdgeMesh.prev(h);
+    if (mesh.pole[h] != 0 || mesh.pole[n] != 0 || mesh.pole[p] != 0) {
+      return false;
+    }
+    System.arraycopy(corners, corner, around, 0, 2);
+    System.arraycopy(mesh.uv, 2 * h, around, 2, 2);
+    System.arraycopy(mesh.uv, 2 * n, around, 4, 2);
+    System.arraycopy(mesh.uv, 2 * p, around, 6, 2);
+    return Shape.turn(mesh, h, around, 2, 0, 6) > 0 && Shape.turn(mesh, h, around, 0, 4, 6) > 0;
   }
 
   private double facing(int t) {
