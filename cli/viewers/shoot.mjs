@@ -1,6 +1,7 @@
 // usage: node shoot.mjs MODULES FILE.glb OUT_PREFIX [--chromium PATH] [--variant NAME]... [--orbit "30deg 70deg 105%"]
 // Takes pictures of a heatmap in two independent viewers, three.js and model-viewer, in headless
-// Chromium: OUT_PREFIX-three.png and OUT_PREFIX-model-viewer[-VARIANT].png.
+// Chromium: OUT_PREFIX-three.png and OUT_PREFIX-model-viewer[-VARIANT].png. Exits 1 where a page
+// reports an error.
 // MODULES/node_modules holds three, @google/model-viewer and playwright-core.
 import { createServer } from 'node:http';
 import { readFileSync } from 'node:fs';
@@ -72,8 +73,12 @@ const browser = await chromium.launch({
 });
 try {
   const page = await browser.newPage({ viewport: { width: WIDE, height: HIGH } });
-  page.on('pageerror', (error) => console.error(`page error: ${error}`));
-  page.on('console', (m) => ['error', 'warning'].includes(m.type()) && console.error(`${m.type()}: ${m.text()}`));
+  const complain = (text) => {
+    console.error(text);
+    process.exitCode = 1;
+  };
+  page.on('pageerror', (error) => complain(`page error: ${error}`));
+  page.on('console', (m) => m.type() === 'error' && complain(`console error: ${m.text()}`));
   const open = async (name) => {
     await page.goto(`${origin}/${name}`);
     await page.waitForFunction(() => document.title === 'done', null, { timeout: 120000 });

@@ -18,6 +18,7 @@ import javax.imageio.ImageIO;
 import org.edgefield.cli.colour.ColourScale;
 import org.edgefield.field.job.Electrode;
 import org.edgefield.field.result.FieldResult;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 
 final class HeatmapWriterTest {
@@ -213,14 +214,24 @@ final class HeatmapWriterTest {
   }
 
   @Test
+  void aQuarterMillionTrianglesTakeUnderASecond() throws IOException {
+    assertThat(seconds(251)).isLessThan(1);
+  }
+
+  @Test
+  @Tag("slow")
   void aMillionTrianglesTakeWellUnderTwoSeconds() throws IOException {
+    assertThat(seconds(501)).isLessThan(1.5);
+  }
+
+  /** Processor time to write a ball of 4 rings^2 triangles with two pins. */
+  private static double seconds(int rings) throws IOException {
     SampleScene scene =
         new SampleScene()
-            .ball("Ball", 0, 0, 0, 0.1, 501)
+            .ball("Ball", 0, 0, 0, 0.1, rings)
             .electrode("ball", Electrode.Kind.LIVE, 0)
             .duty("d", 1.5, 300, 500);
     FieldResult result = scene.result();
-    assertThat(result.mesh().triangleCount()).isGreaterThan(1_000_000);
     HeatmapStamp stamp = new HeatmapStamp("0.0-test", LocalDate.of(2026, 1, 2));
     long before = ManagementFactory.getThreadMXBean().getCurrentThreadCpuTime();
     long[] bytes = new long[1];
@@ -248,6 +259,6 @@ final class HeatmapWriterTest {
         result.mesh().triangleCount(),
         bytes[0] / 1e6,
         seconds);
-    assertThat(seconds).isLessThan(2);
+    return seconds;
   }
 }
