@@ -16,7 +16,7 @@ final class CadLimits {
   private static final double TOO_SHORT = 0.6;
 
   /** Smallest share to which a size is lowered; thinner slivers of the model stay slivers. */
-  private static final double LEAST_SHARE = 1.0 / 64;
+  private static final double LEAST_SHARE = 1.0 / 256;
 
   private final HalfEdgeMesh mesh;
   private final VertexField field;

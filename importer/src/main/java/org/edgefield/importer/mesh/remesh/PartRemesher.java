@@ -10,21 +10,21 @@ import org.edgefield.importer.mesh.size.VertexField;
  * short ones, flips and relaxes, until little changes. Deterministic.
  *
  * <p>CAD vertices and CAD edges are kept, seams included. Where the CAD model itself has slivers
- * thinner than 1/64 of the size around, elements there stay slivers.
+ * thinner than 1/256 of the size around, elements there stay slivers.
  */
 public final class PartRemesher {
   private static final int PASSES = 5;
   private static final int SPLIT_ROUNDS = 80;
   private static final int COLLAPSE_ROUNDS = 3;
 
-  /** From this pass on, narrow places between CAD edges lower the sizes. */
-  private static final int LIMITS_FROM = 1;
-
   /** Share of triangles that may still change when the work counts as done. */
   private static final double SETTLED = 0.01;
 
   /** Shape below which a triangle counts as flat. */
   private static final double FLAT = 1e-3;
+
+  /** Splits per triangle of a round that is not worth another one; the next pass goes on. */
+  private static final double FEW = 0.002;
 
   /** Triangles over the number wanted from which on they are thinned out. */
   private static final double CROWDED = 1.15;
@@ -75,10 +75,10 @@ public final class PartRemesher {
     Flipper.run(w);
     for (int pass = 0; pass < PASSES; pass++) {
       int changes = splitAll() + collapseAll() + repair();
-      relax(2, 0.95);
-      w.refreshAll(pass >= LIMITS_FROM);
+      relax(2, 0.9);
+      w.refreshAll(true);
       Flipper.run(w);
-      if (pass > LIMITS_FROM && changes < SETTLED * w.mesh.living) {
+      if (pass > 0 && changes < SETTLED * w.mesh.living) {
         break;
       }
     }
@@ -95,7 +95,7 @@ public final class PartRemesher {
       int n = splitter.round(choice);
       total += n;
       Flipper.run(w);
-      if (n > 0) {
+      if (n > FEW * w.mesh.living) {
         choice = choice == Splitter.Choice.ALL ? Splitter.Choice.LONGEST : choice;
       } else if (choice == Splitter.Choice.ALL) {
         break;

@@ -55,25 +55,25 @@ final class Splitter {
   /** One round; returns the number of splits. */
   int round(Choice choice) {
     HalfEdgeMesh mesh = w.mesh;
-    measure();
+    measure(choice == Choice.OUTLINES);
     // A split renumbers the half-edges of its two triangles, so that each takes part in one only.
     boolean[] taken = new boolean[mesh.triangles];
     int n = 0;
-    for (int h = 0; h < 3 * mesh.triangles; h++) {
-      if (mesh.face[h / 3] >= 0
-          && h < mesh.opp[h]
-          && length[h] > LONG
-          && !taken[h / 3]
-          && !taken[mesh.opp[h] / 3]
-          && (choice == Choice.OUTLINES
-              ? mesh.cad[h] >= 0
-              : choice == Choice.ALL || length[h] >= NEARLY_LONGEST * longestBeside(h))) {
-        if (n == list.length) {
-          list = Arrays.copyOf(list, 2 * n);
+    for (int t = 0; t < mesh.triangles; t++) {
+      for (int h = 3 * t; h < 3 * t + 3 && mesh.face[t] >= 0 && !taken[t]; h++) {
+        int o = mesh.opp[h];
+        if (h < o
+            && (choice != Choice.OUTLINES || mesh.cad[h] >= 0)
+            && length[h] > LONG
+            && !taken[o / 3]
+            && (choice != Choice.LONGEST || length[h] >= NEARLY_LONGEST * longestBeside(h))) {
+          if (n == list.length) {
+            list = Arrays.copyOf(list, 2 * n);
+          }
+          list[n++] = h;
+          taken[t] = true;
+          taken[o / 3] = true;
         }
-        list[n++] = h;
-        taken[h / 3] = true;
-        taken[mesh.opp[h] / 3] = true;
       }
     }
     // A round that is refused almost everywhere would go on for ever in small steps.
@@ -81,15 +81,21 @@ final class Splitter {
     return made * REFUSED < n ? 0 : made;
   }
 
-  private void measure() {
+  private void measure(boolean outlinesOnly) {
     HalfEdgeMesh mesh = w.mesh;
     if (length.length < 3 * mesh.triangles) {
       length = new double[3 * mesh.face.length];
     }
-    for (int h = 0; h < 3 * mesh.triangles; h++) {
-      if (mesh.face[h / 3] >= 0 && h < mesh.opp[h]) {
-        length[h] = Shape.length(mesh, w.field, h);
-        length[mesh.opp[h]] = length[h];
+    for (int t = 0; t < mesh.triangles; t++) {
+      if (mesh.face[t] < 0) {
+        continue;
+      }
+      for (int h = 3 * t; h < 3 * t + 3; h++) {
+        int o = mesh.opp[h];
+        if (h < o && (!outlinesOnly || mesh.cad[h] >= 0)) {
+          length[h] = Shape.length(mesh, w.field, h);
+          length[o] = length[h];
+        }
       }
     }
   }
