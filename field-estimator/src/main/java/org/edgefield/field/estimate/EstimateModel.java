@@ -455,6 +455,12 @@ public final class EstimateModel implements LocalLaw {
   }
 
   @Override
+  public double largestRadius_m(int node) {
+    int s = sites.siteOfNode[node];
+    return sites.form[s] == Sites.SMOOTH ? Double.POSITIVE_INFINITY : sites.thickness[s] / 2;
+  }
+
+  @Override
   public double change(int duty, int node, double radius_m, double gap_m) {
     int s = sites.siteOfNode[node];
     Value v = evaluate(s, fieldCase.duties().get(duty));

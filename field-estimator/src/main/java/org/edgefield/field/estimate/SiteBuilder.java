@@ -10,6 +10,7 @@ import org.edgefield.curvature.Features;
 import org.edgefield.curvature.Features.RoundedEdge;
 import org.edgefield.curvature.SurfaceNodes;
 import org.edgefield.field.edge.RoundedWedge;
+import org.edgefield.field.hotspot.MeshAreas;
 import org.edgefield.field.hotspot.NodeFaces;
 import org.edgefield.field.job.EdgesAsMade;
 import org.edgefield.field.result.Law;
@@ -111,6 +112,7 @@ final class SiteBuilder {
               }
             });
     roundedEdges(sites, depth);
+    roundedCorners(sites, depth);
     sharpEdges(sites, siteOfVertex);
     return sites;
   }
@@ -269,6 +271,71 @@ final class SiteBuilder {
     }
   }
 
+  /**
+   * Faces that are round in both directions but turn through less than a hemisphere are corners,
+   * not balls. The solid angle of the turn is the integral of the Gaussian curvature.
+   */
+  private void roundedCorners(Sites sites, double[] depth) {
+    double[] turn = new double[rounded.length];
+    double[] thin = new double[rounded.length];
+    double[] wide = new double[rounded.length];
+    Arrays.fill(thin, Double.POSITIVE_INFINITY);
+    double[] area = MeshAreas.triangles(mesh);
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      int f = mesh.triangleFace()[t];
+      for (int c = 0; c < 3; c++) {
+        int n = nodes.cornerNode()[3 * t + c];
+        turn[f] += area[t] / 3 * Math.max(0, nodes.k1()[n]) * Math.max(0, nodes.k2()[n]);
+      }
+    }
+    for (int s = 0; s < sites.count(); s++) {
+      if (depth[s] > 0) {
+        int f = nodeFace[sites.node[s]];
+        thin[f] = Math.min(thin[f], depth[s]);
+        wide[f] = Math.max(wide[f], depth[s]);
+      }
+    }
+    RoundedWedge right = RoundedWedge.ofInteriorAngle(Math.PI / 2);
+    for (int s = 0; s < sites.count(); s++) {
+      int f = nodeFace[sites.node[s]];
+      double k1 = sites.k1[s];
+      double k2 = sites.k2[s];
+      if (sites.form[s] != Sites.SMOOTH || k2 < CORNER_ROUNDNESS * k1 || turn[f] > CORNER_TURN) {
+        continue;
+      }
+      double radius = 1 / Math.sqrt(k1 * k2);
+      if (k1 > 0 && depth[s] > 0 && wide[f] > CORNER_DEPTH * radius) {
+        sites.form[s] = Sites.CORNER;
+        sites.law[s] = Law.ROUNDED_WEDGE;
+        sites.wedge[s] = turn[f] > RIGHT_CORNER_TURN ? SHARP_CORNER : right;
+        sites.thickness[s] = Math.max(thin[f], 2 * radius);
+        sites.width[s] = Math.max(wide[f], 2 * radius);
+        sites.end2[s] = inverseSquare(longestHalf(assembly.parts().get(sites.part[s])));
+        sites.k1[s] = 1 / radius;
+        sites.k2[s] = 1 / radius;
+      }
+    }
+  }
+
+  /** Ratio of the curvatures from which a place is round in both directions. */
+  private static final double CORNER_ROUNDNESS = 0.3;
+
+  /** Solid angle of the turn below which a round face is a corner: short of a hemisphere. */
+  private static final double CORNER_TURN = 1.7 * Math.PI;
+
+  /** Solid angle up to which it counts as right-angled (an octant turns through pi / 2). */
+  private static final double RIGHT_CORNER_TURN = 0.55 * Math.PI;
+
+  /** Depth of the body in radii from which its round face may be a corner. */
+  private static final double CORNER_DEPTH = 2.5;
+
+  private static final RoundedWedge SHARP_CORNER = RoundedWedge.ofInteriorAngle(Math.toRadians(45));
+
+  private static double longestHalf(Part part) {
+    double[] b = part.bounds_m();
+    return Math.max(b[3] - b[0], Math.max(b[4] - b[1], b[5] - b[2])) / 2;
+  }
+
   /** Sharp edges and corners with their radius as made. */
   private void sharpEdges(Sites sites, int[] siteOfVertex) {
     int vertices = mesh.vertexCount();
@@ -327,7 +394,7 @@ final class SiteBuilder {
                   + sumNormals[3 * s + 1] * sumNormals[3 * s + 1]
                   + sumNormals[3 * s + 2] * sumNormals[3 * s + 2]);
       double[] d = Arrays.copyOfRange(tangent, 3 * v, 3 * v + 3);
-      double end = inverseSquare(halfExtent(part, d));
+      double end = inverseSquare(corner ? longestHalf(part) : halfExtent(part, d));
       sites.form[s] = corner ? Sites.CORNER : Sites.EDGE;
       sites.law[s] = corner ? Law.CORNER_AS_MADE : Law.EDGE_AS_MADE;
       sites.wedge[s] = RoundedWedge.ofInteriorAngle(Math.max(0, sharpest[v]));

@@ -114,7 +114,7 @@ final class Sites {
     double t = Math.max(thickness[site], 2 * r);
     double w = Math.max(width[site], 2 * r);
     if (form[site] == CORNER) {
-      return tube.corner(wedge[site], r, t, w, c2[site]);
+      return tube.corner(wedge[site], r, t, w, end2[site]);
     }
     return tube.edge(wedge[site], r, t, w, k2[site], c2[site]);
   }

@@ -30,9 +30,15 @@ public final class PermittedFields {
         double roughness = permitted.roughness();
         yield (k1, k2) -> PeekLaw.surface_V_per_m(k1, k2, delta, roughness) * share;
       }
-      case STREAMER ->
-          throw new GasException(
-              "the streamer criterion is not available in a screen: use fixed or peek");
+      case STREAMER -> {
+        double pressure =
+            AirDensity.pressureAt20_Pa(surroundings.pressure_Pa(), surroundings.temperature_K());
+        SurfaceInception inception =
+            new SurfaceInception(
+                new StreamerCriterion(Ionisations.of(surroundings.gas()), pressure));
+        double factor = share * permitted.roughness();
+        yield (k1, k2) -> inception.at_V_per_m(k1, k2) * factor;
+      }
     };
   }
 }

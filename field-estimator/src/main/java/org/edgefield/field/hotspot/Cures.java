@@ -55,7 +55,8 @@ final class Cures {
                   / permitted.at_V_per_m(1 / r, k2)
               - 1;
         };
-    return root(excess, radius_m, Math.min(LEAST_RADIUS_M, radius_m), LARGEST * radius_m);
+    double largest = Math.min(LARGEST * radius_m, model.largestRadius_m(node));
+    return root(excess, radius_m, Math.min(LEAST_RADIUS_M, radius_m), largest);
   }
 
   private double gap(int duty, int node, double utilisation) {

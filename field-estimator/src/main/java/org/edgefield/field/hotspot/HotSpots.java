@@ -51,8 +51,9 @@ public final class HotSpots {
     regions = new Regions(mesh, nodes, features, assembly.geometry().faceCount());
     nodePart = new int[nodes.count()];
     nodeArea = new double[nodes.count()];
+    double[] area = MeshAreas.triangles(mesh);
     for (int t = 0; t < mesh.triangleCount(); t++) {
-      double third = area(t) / 3;
+      double third = area[t] / 3;
       int part = assembly.geometry().facePart(mesh.triangleFace()[t]);
       for (int c = 0; c < 3; c++) {
         int n = nodes.cornerNode()[3 * t + c];
@@ -60,19 +61,6 @@ public final class HotSpots {
         nodeArea[n] += third;
       }
     }
-  }
-
-  private double area(int t) {
-    double[] e = new double[6];
-    for (int k = 0; k < 3; k++) {
-      double a = mesh.xyz()[3 * mesh.triangles()[3 * t] + k];
-      e[k] = mesh.xyz()[3 * mesh.triangles()[3 * t + 1] + k] - a;
-      e[3 + k] = mesh.xyz()[3 * mesh.triangles()[3 * t + 2] + k] - a;
-    }
-    double x = e[1] * e[5] - e[2] * e[4];
-    double y = e[2] * e[3] - e[0] * e[5];
-    double z = e[0] * e[4] - e[1] * e[3];
-    return 0.5 * Math.sqrt(x * x + y * y + z * z);
   }
 
   /**

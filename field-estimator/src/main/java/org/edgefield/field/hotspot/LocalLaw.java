@@ -25,6 +25,12 @@ public interface LocalLaw {
   double[] curvatures(int node);
 
   /**
+   * Largest radius that a node's feature can be given on the body as it is: half the thickness
+   * behind an edge or corner, infinite on whole round bodies.
+   */
+  double largestRadius_m(int node);
+
+  /**
    * Field at a node with another radius or gap, over the field with its own.
    *
    * @param duty index in the case
