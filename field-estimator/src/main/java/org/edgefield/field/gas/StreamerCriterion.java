@@ -21,6 +21,10 @@ public final class StreamerCriterion {
   private static final double LEAST_PRESSURE_PA = 1e4;
   private static final double LARGEST_PRESSURE_PA = 1e6;
 
+  private static final double FIRST_STEP_M = 1e-6;
+  private static final double STEP_GROWTH = 1.3;
+  private static final double LEAST_STEPS = 100;
+
   private static final int PANELS = 48;
 
   /** Three-point Gauss rule on 0..1. */
@@ -61,10 +65,7 @@ public final class StreamerCriterion {
     if (field_V_per_m <= critical) {
       return 0;
     }
-    double end = gap_m;
-    if (field_V_per_m * profile.share(gap_m) < critical) {
-      end = zoneEnd(field_V_per_m, profile, gap_m, critical);
-    }
+    double end = zoneEnd(field_V_per_m, profile, gap_m, critical);
     double sum = 0;
     for (int i = 0; i < PANELS; i++) {
       for (int g = 0; g < GAUSS.length; g++) {
@@ -85,16 +86,18 @@ public final class StreamerCriterion {
     return sum;
   }
 
-  /** First place where the field is critical. */
+  /** First place where the field falls to critical, or the end of the gap. */
   private static double zoneEnd(
       double field_V_per_m, FieldProfile profile, double gap_m, double critical) {
     double low = 0;
-    double scan = Math.min(gap_m, 1e-6);
-    while (scan < gap_m && field_V_per_m * profile.share(scan) >= critical) {
-      low = scan;
-      scan *= 1.3;
+    double high = Math.min(gap_m, FIRST_STEP_M);
+    while (field_V_per_m * profile.share(high) >= critical) {
+      if (high == gap_m) {
+        return gap_m;
+      }
+      low = high;
+      high = Math.min(gap_m, Math.min(STEP_GROWTH * high, high + gap_m / LEAST_STEPS));
     }
-    double high = Math.min(scan, gap_m);
     for (int i = 0; i < 60; i++) {
       double middle = 0.5 * (low + high);
       if (field_V_per_m * profile.share(middle) >= critical) {
