@@ -33,7 +33,13 @@ class SmoothBodiesTest {
       Arrays.fill(one, 1);
       Gmres.Outcome out =
           Gmres.solve(
-              layer::apply, layer.diagonal(), new double[][] {one}, null, 1e-6, 80, Progress.NONE);
+              layer::apply,
+              layer.localInverse(),
+              new double[][] {one},
+              null,
+              1e-6,
+              80,
+              Progress.NONE);
       double charge = 0;
       double[] p = new double[9];
       for (int t = 0; t < triangles.count(); t++) {

@@ -1,9 +1,8 @@
 package org.edgefield.field.bem.assembly;
 
 import java.util.Arrays;
-import org.edgefield.field.bem.quadrature.TriangleRule;
+import org.edgefield.field.bem.krylov.Gmres;
 import org.edgefield.field.bem.surface.CurvedTriangles;
-import org.edgefield.field.fmm.FastMultipole;
 import org.edgefield.field.parallel.Workers;
 
 /**
@@ -13,22 +12,25 @@ import org.edgefield.field.parallel.Workers;
  * <pre>  (A s)_i = sum_k w_ik Int s(y) / |x_k - y| dS(y)      (V = A s, surface field E = 4 pi s)
  * </pre>
  *
- * All pairs go through the fast multipole method with the three-point rule; near pairs carry a
- * sparse correction to the accurate integral. With a mirror the image of every charge acts too.
+ * All pairs are summed with the three-point rule, in large models by the fast multipole method;
+ * near pairs carry a sparse correction to the accurate integral. With a mirror the image of every
+ * charge acts too.
  */
 public final class SingleLayer {
   private static final int BLOCK = 256;
+
+  /** Most unknowns for which the far field is kept as a full matrix (200 MB). */
+  private static final int DENSE = 5000;
 
   private final int[] cornerNode;
   private final Collocation collocation;
   private final boolean mirrored;
   private final Workers workers;
-  private final FastMultipole far;
-  private final double[] farWeight;
+  private final FarField far;
   private final int[] start;
   private final int[] column;
   private final double[] value;
-  private final double[] diagonal;
+  private final float[] potential;
 
   /**
    * Prepares the operator.
@@ -51,30 +53,22 @@ public final class SingleLayer {
     this.collocation = collocation;
     this.mirrored = mirror != null;
     this.workers = workers;
-    int nt = triangles.count();
-    TriangleRule rule = TriangleRule.THREE;
-    double[] sources = new double[9 * nt];
-    farWeight = new double[3 * nt];
-    double[] p = new double[9];
-    for (int t = 0; t < nt; t++) {
-      for (int g = 0; g < 3; g++) {
-        triangles.evaluate(t, rule.u()[g], rule.v()[g], p);
-        System.arraycopy(p, 0, sources, 9 * t + 3 * g, 3);
-        farWeight[3 * t + g] = rule.weight()[g] * CurvedTriangles.cross(p);
-      }
-    }
     double[] points = collocation.points();
     double[] targets = Arrays.copyOf(points, mirrored ? 2 * points.length : points.length);
     if (mirrored) {
       System.arraycopy(mirror.image(points), 0, targets, points.length, points.length);
     }
-    far = new FastMultipole(sources, targets, tolerance, workers);
+    FarSources sources = FarSources.of(triangles, cornerNode);
+    far =
+        collocation.rows() <= DENSE
+            ? new DenseFarField(sources, collocation, targets, workers)
+            : new MultipoleFarField(sources, collocation, targets, tolerance, workers);
 
     int rows = collocation.rows();
     NearPairs near = new NearPairs(triangles, targets, workers);
     int[][] columns = new int[rows][];
     double[][] values = new double[rows][];
-    double[] ofNode = new double[rows];
+    float[][] potentials = new float[rows][];
     workers.run(
         (rows + BLOCK - 1) / BLOCK,
         w -> {
@@ -84,22 +78,24 @@ public final class SingleLayer {
               builder.row(i);
               columns[i] = builder.columns();
               values[i] = builder.values();
-              ofNode[i] = builder.diagonal(i);
+              potentials[i] = builder.potentials();
             }
           };
         });
-    diagonal = ofNode;
     start = new int[rows + 1];
     for (int i = 0; i < rows; i++) {
       start[i + 1] = Math.addExact(start[i], columns[i].length);
     }
     column = new int[start[rows]];
     value = new double[start[rows]];
+    potential = new float[start[rows]];
     for (int i = 0; i < rows; i++) {
       System.arraycopy(columns[i], 0, column, start[i], columns[i].length);
       System.arraycopy(values[i], 0, value, start[i], values[i].length);
+      System.arraycopy(potentials[i], 0, potential, start[i], potentials[i].length);
       columns[i] = null;
       values[i] = null;
+      potentials[i] = null;
     }
   }
 
@@ -164,8 +160,12 @@ public final class SingleLayer {
       return Arrays.copyOf(sum, size);
     }
 
-    double diagonal(int i) {
-      return slot[i] < 0 ? 0 : accurate[slot[i]];
+    float[] potentials() {
+      float[] out = new float[size];
+      for (int k = 0; k < size; k++) {
+        out[k] = (float) accurate[k];
+      }
+      return out;
     }
   }
 
@@ -174,9 +174,9 @@ public final class SingleLayer {
     return collocation.rows();
   }
 
-  /** Diagonal entries of the accurate near part, the scale of each row. */
-  public double[] diagonal() {
-    return diagonal;
+  /** Approximate inverse made from the near potentials, to precondition with. */
+  public Gmres.Operator localInverse() {
+    return new LocalInverse(new NearPotentials(start, column, potential), workers);
   }
 
   /** Number of stored corrections. */
@@ -191,45 +191,22 @@ public final class SingleLayer {
    * @param potential out: per set, one value per row
    */
   public void apply(double[][] density, double[][] potential) {
-    int sets = density.length;
-    double[][] strength = new double[sets][farWeight.length];
-    TriangleRule rule = TriangleRule.THREE;
-    for (int k = 0; k < sets; k++) {
-      double[] s = density[k];
-      double[] q = strength[k];
-      for (int t = 0; t < q.length / 3; t++) {
-        double s0 = s[cornerNode[3 * t]];
-        double s1 = s[cornerNode[3 * t + 1]];
-        double s2 = s[cornerNode[3 * t + 2]];
-        for (int g = 0; g < 3; g++) {
-          double u = rule.u()[g];
-          double v = rule.v()[g];
-          q[3 * t + g] = farWeight[3 * t + g] * ((1 - u - v) * s0 + u * s1 + v * s2);
-        }
-      }
-    }
-    int n = collocation.points().length / 3;
-    double[][] at = new double[sets][mirrored ? 2 * n : n];
-    far.sum(strength, at, null);
+    far.apply(density, potential);
     workers.run(
         (size() + BLOCK - 1) / BLOCK,
         w ->
             b -> {
-              for (int k = 0; k < sets; k++) {
+              for (int k = 0; k < density.length; k++) {
                 int end = Math.min(size(), (b + 1) * BLOCK);
                 for (int i = b * BLOCK; i < end; i++) {
-                  potential[k][i] = row(i, density[k], at[k], n);
+                  potential[k][i] += correction(i, density[k]);
                 }
               }
             });
   }
 
-  private double row(int i, double[] density, double[] at, int n) {
+  private double correction(int i, double[] density) {
     double sum = 0;
-    for (int e = collocation.rowStart()[i]; e < collocation.rowStart()[i + 1]; e++) {
-      int p = collocation.rowPoint()[e];
-      sum += collocation.rowWeight()[e] * (mirrored ? at[p] - at[p + n] : at[p]);
-    }
     for (int e = start[i]; e < start[i + 1]; e++) {
       sum += value[e] * density[column[e]];
     }

@@ -6,7 +6,8 @@ import org.edgefield.importer.Progress;
 /**
  * GMRES (Saad and Schultz, SIAM J. Sci. Stat. Comput. 7 (1986) 856, memory) for several right-hand
  * sides in step: each has its own Krylov space, all share one sweep of the operator per iteration.
- * Left scaling by the given diagonal; modified Gram-Schmidt, Givens rotations.
+ * Preconditioned from the right, so that residuals are those of the system itself; modified
+ * Gram-Schmidt, Givens rotations.
  */
 public final class Gmres {
   private Gmres() {}
@@ -31,7 +32,7 @@ public final class Gmres {
    * Solves A x = b.
    *
    * @param operator the matrix
-   * @param scale row scaling, b and A are divided by it; nonzero
+   * @param preconditioner approximate inverse of the matrix
    * @param rightSides right-hand sides
    * @param guess start vectors, or null for zero
    * @param tolerance relative residual asked for
@@ -40,14 +41,14 @@ public final class Gmres {
    */
   public static Outcome solve(
       Operator operator,
-      double[] scale,
+      Operator preconditioner,
       double[][] rightSides,
       double[][] guess,
       double tolerance,
       int limit,
       Progress progress) {
     int sets = rightSides.length;
-    int n = scale.length;
+    int n = rightSides[0].length;
     double[][] start = new double[sets][];
     double[][] residual = new double[sets][n];
     for (int k = 0; k < sets; k++) {
@@ -60,8 +61,8 @@ public final class Gmres {
     for (int k = 0; k < sets; k++) {
       double norm = 0;
       for (int i = 0; i < n; i++) {
-        residual[k][i] = (rightSides[k][i] - residual[k][i]) / scale[i];
-        double b = rightSides[k][i] / scale[i];
+        residual[k][i] = rightSides[k][i] - residual[k][i];
+        double b = rightSides[k][i];
         norm += b * b;
       }
       space[k] = new Space(residual[k], Math.sqrt(norm), tolerance, limit);
@@ -78,17 +79,15 @@ public final class Gmres {
       if (open == 0) {
         break;
       }
+      double[][] turned = new double[open][n];
+      preconditioner.apply(Arrays.copyOf(in, open), turned);
       double[][] out = new double[open][n];
-      operator.apply(Arrays.copyOf(in, open), out);
+      operator.apply(turned, out);
       int taken = 0;
       double worst = 0;
       for (Space s : space) {
         if (!s.done()) {
-          double[] w = out[taken++];
-          for (int i = 0; i < n; i++) {
-            w[i] /= scale[i];
-          }
-          s.extend(w);
+          s.extend(out[taken++]);
         }
         worst = Math.max(worst, s.relative());
       }
@@ -100,7 +99,11 @@ public final class Gmres {
     }
     double worst = 0;
     for (int k = 0; k < sets; k++) {
-      space[k].addTo(start[k]);
+      double[][] correction = new double[1][n];
+      preconditioner.apply(new double[][] {space[k].combination(n)}, correction);
+      for (int i = 0; i < n; i++) {
+        start[k][i] += correction[0][i];
+      }
       worst = Math.max(worst, space[k].relative());
     }
     return new Outcome(start, step, worst);
@@ -186,7 +189,9 @@ public final class Gmres {
       size++;
     }
 
-    void addTo(double[] x) {
+    /** Best combination of the basis. */
+    double[] combination(int n) {
+      double[] x = new double[n];
       double[] y = new double[size];
       for (int i = size - 1; i >= 0; i--) {
         double sum = g[i];
@@ -201,6 +206,7 @@ public final class Gmres {
           x[i] += y[j] * v[i];
         }
       }
+      return x;
     }
 
     private static double norm(double[] v) {
