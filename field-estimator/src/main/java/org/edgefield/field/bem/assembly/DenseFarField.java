@@ -1,5 +1,6 @@
 package org.edgefield.field.bem.assembly;
 
+import java.util.Arrays;
 import org.edgefield.field.parallel.Workers;
 
 /**
@@ -8,7 +9,7 @@ import org.edgefield.field.parallel.Workers;
 final class DenseFarField implements FarField {
   private static final int BLOCK = 32;
 
-  private final double[][] matrix;
+  private final float[][] matrix;
   private final Workers workers;
 
   /**
@@ -20,20 +21,25 @@ final class DenseFarField implements FarField {
     this.workers = workers;
     int n = rows.rows();
     int images = targets.length > rows.points().length ? rows.points().length / 3 : 0;
-    matrix = new double[n][];
+    matrix = new float[n][];
     workers.run(
         (n + BLOCK - 1) / BLOCK,
         w -> {
           double[] share = new double[sources.count()];
+          double[] sum = new double[n];
           return b -> {
             for (int i = b * BLOCK; i < Math.min(n, (b + 1) * BLOCK); i++) {
-              matrix[i] = new double[n];
+              Arrays.fill(sum, 0);
               for (int e = rows.rowStart()[i]; e < rows.rowStart()[i + 1]; e++) {
                 int p = rows.rowPoint()[e];
-                addPoint(sources, targets, p, rows.rowWeight()[e], share, matrix[i]);
+                addPoint(sources, targets, p, rows.rowWeight()[e], share, sum);
                 if (images > 0) {
-                  addPoint(sources, targets, p + images, -rows.rowWeight()[e], share, matrix[i]);
+                  addPoint(sources, targets, p + images, -rows.rowWeight()[e], share, sum);
                 }
+              }
+              matrix[i] = new float[n];
+              for (int j = 0; j < n; j++) {
+                matrix[i][j] = (float) sum[j];
               }
             }
           };
@@ -80,7 +86,7 @@ final class DenseFarField implements FarField {
   }
 
   /** Four sums in turn: the order is fixed, and the additions do not wait for each other. */
-  private static double dot(double[] a, double[] b) {
+  private static double dot(float[] a, double[] b) {
     double s0 = 0;
     double s1 = 0;
     double s2 = 0;

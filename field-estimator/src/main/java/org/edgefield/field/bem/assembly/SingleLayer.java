@@ -19,8 +19,8 @@ import org.edgefield.field.parallel.Workers;
 public final class SingleLayer {
   private static final int BLOCK = 256;
 
-  /** Most unknowns for which the far field is kept as a full matrix (200 MB). */
-  private static final int DENSE = 5000;
+  /** Most unknowns for which the far field is kept as a full matrix (256 MB). */
+  private static final int DENSE = 8000;
 
   private final int[] cornerNode;
   private final Collocation collocation;

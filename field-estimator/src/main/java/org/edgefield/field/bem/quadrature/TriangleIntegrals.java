@@ -149,6 +149,11 @@ public final class TriangleIntegrals {
       (r > SEVEN_BEYOND ? seven : sevenBy4).ready().plain(x, y, z, out);
       return;
     }
+    if (triangles.flat(triangle)) {
+      System.arraycopy(triangles.geometry(), CurvedTriangles.STRIDE * triangle, plane, 0, 9);
+      PlanarPotential.linear(plane, x, y, z, out);
+      return;
+    }
     closest(x, y, z);
     triangles.evaluate(triangle, foot[0], foot[1], p);
     for (int i = 0; i < 3; i++) {
@@ -171,6 +176,16 @@ public final class TriangleIntegrals {
    */
   public void far(double x, double y, double z, double[] out) {
     three.ready().plain(x, y, z, out);
+  }
+
+  /** Distance of a point from the open triangle, metres. */
+  public double distance(double x, double y, double z) {
+    closest(x, y, z);
+    triangles.evaluate(triangle, foot[0], foot[1], p);
+    double dx = p[0] - x;
+    double dy = p[1] - y;
+    double dz = p[2] - z;
+    return Math.sqrt(dx * dx + dy * dy + dz * dz);
   }
 
   // Closest point by Gauss-Newton in (u, v), kept inside the triangle.

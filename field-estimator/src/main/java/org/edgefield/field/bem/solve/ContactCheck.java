@@ -8,6 +8,7 @@ import org.edgefield.importer.brep.Assembly;
 import org.edgefield.importer.brep.Part;
 import org.edgefield.importer.mesh.SurfaceMesh;
 import org.edgefield.importer.mesh.spatial.TriangleCursor;
+import org.edgefield.importer.mesh.spatial.TriangleCursor.Side;
 import org.edgefield.importer.mesh.spatial.TriangleTree;
 
 /**
@@ -114,6 +115,7 @@ final class ContactCheck {
         others[e][p] = electrodeOfPart[p] >= 0 && electrodeOfPart[p] != e;
       }
     }
+    refuseCrossings(assembly, mesh, electrodeOfPart, part, others, tree.cursor());
     int allowed = -1;
     for (int c = 0; c < mesh.triangles().length; c++) {
       int v = mesh.triangles()[c];
@@ -141,6 +143,45 @@ final class ContactCheck {
             && test.inside(other.index(), p[0], p[1], p[2])) {
           throw shorted(parts.get(own), other, "intersect", p);
         }
+      }
+    }
+  }
+
+  // Bodies may cross without a vertex of one inside the other: look along the sides of triangles.
+  private static void refuseCrossings(
+      Assembly assembly,
+      SurfaceMesh mesh,
+      int[] electrodeOfPart,
+      int[] part,
+      boolean[][] others,
+      TriangleCursor cursor) {
+    int allowed = -1;
+    double[] x = mesh.xyz();
+    for (int c = 0; c < mesh.triangles().length; c++) {
+      int e = electrodeOfPart[part[c / 3]];
+      int a = 3 * mesh.triangles()[c];
+      int b = 3 * mesh.triangles()[c % 3 == 2 ? c - 2 : c + 1];
+      // Each side belongs to two triangles, one of which runs it upwards.
+      if (e < 0 || a > b) {
+        continue;
+      }
+      if (allowed != e) {
+        cursor.allow(others[e]);
+        allowed = e;
+      }
+      double dx = x[b] - x[a];
+      double dy = x[b + 1] - x[a + 1];
+      double dz = x[b + 2] - x[a + 2];
+      double length = Math.sqrt(dx * dx + dy * dy + dz * dz);
+      if (length > 0
+          && cursor.ray(x[a], x[a + 1], x[a + 2], dx, dy, dz, 0, length, Side.ENTERING)) {
+        double[] at = new double[3];
+        cursor.point(at, 0);
+        throw shorted(
+            assembly.parts().get(part[c / 3]),
+            assembly.parts().get(cursor.group()),
+            "intersect",
+            at);
       }
     }
   }

@@ -73,6 +73,7 @@ public final class FieldSolver {
     Level level = null;
     double[][] uncertainty = null;
     double[][] change = null;
+    GapCheck gaps = null;
     boolean converged = false;
     try (Workers workers = new Workers(settings.threads())) {
       for (int number = 1; ; number++) {
@@ -84,7 +85,9 @@ public final class FieldSolver {
         double[][] earlier = change;
         change = changes(level, next, fieldCase);
         uncertainty = uncertainties(next, change, earlier);
-        converged = level != null && worst(uncertainty) <= settings.accuracy();
+        double[] width = Refinement.widths(mesh);
+        gaps = GapCheck.of(assembly, next, fieldCase, width);
+        converged = level != null && gaps.resolved() && worst(uncertainty) <= settings.accuracy();
         level = next;
         progress.report("solve", Double.NaN, report(number, level, uncertainty));
         double spent = (System.nanoTime() - begin) * 1e-9;
@@ -92,7 +95,7 @@ public final class FieldSolver {
         if (converged || number == LEVELS || (number > 1 && spent + ahead > settings.time_s())) {
           break;
         }
-        double[] target = Refinement.targets(level, settings.accuracy());
+        double[] target = Refinement.targets(level, width, gaps, settings.accuracy());
         SurfaceMesh finer =
             SurfaceMesher.refine(
                 assembly, mesh, meshSettings, request.withTargetSize(target), labelled);
@@ -103,7 +106,10 @@ public final class FieldSolver {
       }
     }
     List<String> warnings = new ArrayList<>();
-    if (!converged) {
+    if (!gaps.resolved()) {
+      warnings.add(gaps.remark(assembly, level.mesh()));
+    }
+    if (worst(uncertainty) > settings.accuracy()) {
       warnings.add(
           String.format(
               Locale.ROOT,

@@ -1,6 +1,5 @@
 package org.edgefield.field.bem.solve;
 
-import java.util.Arrays;
 import org.edgefield.importer.mesh.SurfaceMesh;
 
 /**
@@ -15,13 +14,15 @@ final class Refinement {
 
   private Refinement() {}
 
-  /** Wanted size per vertex of the level's mesh, metres, infinite where nothing is asked. */
-  static double[] targets(Level level, double accuracy) {
+  /**
+   * Wanted size per vertex of the level's mesh, metres, infinite where nothing is asked.
+   *
+   * @param width element width per vertex, from {@link #widths}
+   * @param gaps wanted sizes in narrow gaps
+   */
+  static double[] targets(Level level, double[] width, GapCheck gaps, double accuracy) {
     ChargedSurface surface = level.surface();
-    SurfaceMesh mesh = level.mesh();
-    double[] width = widths(mesh);
-    double[] target = new double[mesh.vertexCount()];
-    Arrays.fill(target, Double.POSITIVE_INFINITY);
+    double[] target = gaps.target_m().clone();
     int electrodes = level.units().charge_C().length;
     for (int d = 0; d < level.raw().size(); d++) {
       double[] raw = level.raw().get(d);
@@ -48,7 +49,7 @@ final class Refinement {
   }
 
   // Mean height of the triangles around a vertex, brought to the side of an equilateral one.
-  private static double[] widths(SurfaceMesh mesh) {
+  static double[] widths(SurfaceMesh mesh) {
     double[] sum = new double[mesh.vertexCount()];
     int[] count = new int[sum.length];
     double[] x = mesh.xyz();

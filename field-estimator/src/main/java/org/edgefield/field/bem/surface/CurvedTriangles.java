@@ -11,10 +11,14 @@ public final class CurvedTriangles {
   /** Doubles per triangle: three corners, then mid-points of sides 01, 12, 20. */
   public static final int STRIDE = 18;
 
+  /** Bulge of a side over the longest side up to which a triangle counts as plane. */
+  private static final double FLAT = 1e-9;
+
   private final double[] geometry;
   private final double[] centre;
   private final double[] diameter;
   private final double[] aspect;
+  private final boolean[] flat;
 
   /**
    * Takes the geometry over.
@@ -27,6 +31,7 @@ public final class CurvedTriangles {
     centre = new double[3 * n];
     diameter = new double[n];
     aspect = new double[n];
+    flat = new boolean[n];
     for (int t = 0; t < n; t++) {
       measure(t);
     }
@@ -48,6 +53,12 @@ public final class CurvedTriangles {
     System.arraycopy(p, 0, centre, 3 * t, 3);
     double area = 0.5 * cross(p);
     diameter[t] = longest;
+    double bulge = 0;
+    for (int i = 0; i < 9; i++) {
+      double middle = (geometry[g + i] + geometry[g + (i + 3) % 9]) / 2;
+      bulge = Math.max(bulge, Math.abs(geometry[g + 9 + i] - middle));
+    }
+    flat[t] = bulge < FLAT * longest;
     aspect[t] = Math.max(1, 0.433 * longest * longest / Math.max(area, 1e-300));
   }
 
@@ -69,6 +80,11 @@ public final class CurvedTriangles {
   /** Longest side against the height over it, 1 for an equilateral triangle. */
   public double aspect(int t) {
     return aspect[t];
+  }
+
+  /** Whether the triangle is plane with side mid-points half-way: its closed form is exact. */
+  public boolean flat(int t) {
+    return flat[t];
   }
 
   /** The raw geometry, {@link #STRIDE} doubles per triangle; read only. */

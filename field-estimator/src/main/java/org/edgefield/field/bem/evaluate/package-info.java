@@ -1,0 +1,2 @@
+/** Potential and field around the conductors. */
+package org.edgefield.field.bem.evaluate;
