@@ -26,14 +26,20 @@ import org.edgefield.importer.mesh.SurfaceMesher;
  * Solves the field of a case by boundary elements, refining until the peak of every electrode and
  * duty is as accurate as asked, or the budget is spent.
  *
- * <p>The claimed uncertainty of a peak is the largest of its change since the level before, a
- * quarter of the change before that (a change can be small by chance), the distance of raw and
- * recovered value, and a floor of 0.1 %. Sharp edges drawn without a radius have no finite field;
- * there the estimate's value for the edge as made stands.
+ * <p>The claimed uncertainty of a peak is the largest of the error that its change since the level
+ * before lets expect, a quarter of the change before that (a change can be small by chance), the
+ * distance of raw and recovered value, and a floor of 0.1 %. Sharp edges drawn without a radius
+ * have no finite field; there the estimate's value for the edge as made stands.
  */
 public final class FieldSolver {
   private static final int LEVELS = 6;
   private static final double FLOOR = 1e-3;
+
+  /** On the error that the change of a peak lets expect, since convergence is not smooth. */
+  private static final double SAFETY = 1.3;
+
+  /** Ratio of element widths above which a mesh counts as unchanged. */
+  private static final double UNCHANGED = 0.9;
 
   /** Bytes per triangle of a level with four right-hand sides, on the safe side. */
   private static final double BYTES_PER_TRIANGLE = 12_000;
@@ -84,7 +90,7 @@ public final class FieldSolver {
             Level.solve(assembly, features, mesh, fieldCase, farTolerance, workers, labelled);
         double[][] earlier = change;
         change = changes(level, next, fieldCase);
-        uncertainty = uncertainties(next, change, earlier);
+        uncertainty = uncertainties(next, change, earlier, uncertainty);
         double[] width = Refinement.widths(mesh);
         gaps = GapCheck.of(assembly, next, fieldCase, width);
         converged = level != null && gaps.resolved() && worst(uncertainty) <= settings.accuracy();
@@ -95,7 +101,8 @@ public final class FieldSolver {
         if (converged || number == LEVELS || (number > 1 && spent + ahead > settings.time_s())) {
           break;
         }
-        double[] target = Refinement.targets(level, width, gaps, settings.accuracy());
+        double[] target =
+            Refinement.targets(level, width, gaps, uncertainty, settings.accuracy(), number == 1);
         SurfaceMesh finer =
             SurfaceMesher.refine(
                 assembly, mesh, meshSettings, request.withTargetSize(target), labelled);
@@ -143,23 +150,39 @@ public final class FieldSolver {
         100 * worst(uncertainty));
   }
 
-  // Relative change of the peaks per duty and electrode; 0 where there is nothing to compare.
+  /**
+   * Errors that remain, per duty and electrode, from the change of the peaks since the level before
+   * and the ratio r of element widths there: with errors that go as the square of the width, r^2/(1
+   * - r^2) of the change is left. Infinite where an electrode's elements stayed as they were; 0
+   * where there is nothing to compare.
+   */
   private static double[][] changes(Level before, Level now, FieldCase fieldCase) {
     double[][] out = new double[fieldCase.duties().size()][fieldCase.electrodes().size()];
-    for (int d = 0; before != null && d < out.length; d++) {
+    if (before == null) {
+      return out;
+    }
+    double[] widthNow = Refinement.widths(now.mesh());
+    double[] widthBefore = Refinement.widths(before.mesh());
+    for (int d = 0; d < out.length; d++) {
       for (int e = 0; e < out[d].length; e++) {
         int p = now.peak(d, e);
         int q = before.peak(d, e);
         if (p >= 0 && q >= 0) {
           double value = now.recovered().get(d)[p];
-          out[d][e] = value > 0 ? Math.abs(before.recovered().get(d)[q] / value - 1) : 0;
+          double change = value > 0 ? Math.abs(before.recovered().get(d)[q] / value - 1) : 0;
+          double ratio =
+              widthNow[now.nodes().nodeVertex()[now.surface().unknownNode()[p]]]
+                  / widthBefore[before.nodes().nodeVertex()[before.surface().unknownNode()[q]]];
+          double left = SAFETY * ratio * ratio / (1 - ratio * ratio);
+          out[d][e] = ratio > UNCHANGED ? Double.POSITIVE_INFINITY : change * Math.max(1, left);
         }
       }
     }
     return out;
   }
 
-  private static double[][] uncertainties(Level now, double[][] change, double[][] earlier) {
+  private static double[][] uncertainties(
+      Level now, double[][] change, double[][] earlier, double[][] claimed) {
     double[][] out = new double[change.length][];
     for (int d = 0; d < out.length; d++) {
       double[] raw = now.raw().get(d);
@@ -171,9 +194,15 @@ public final class FieldSolver {
         out[d][e] = FLOOR;
         // A thousandth of the highest field is no peak anyone asks for.
         if (p >= 0 && smooth[p] > 1e-3 * highest) {
+          double noise = Math.max(FLOOR, Math.abs(raw[p] / smooth[p] - 1));
+          boolean same = Double.isInfinite(change[d][e]);
+          if (same) {
+            // The elements at the peak are those of the level before, and so is the claim.
+            change[d][e] = earlier[d][e];
+          }
           double before = earlier == null ? 0 : 0.25 * earlier[d][e];
-          double noise = Math.abs(raw[p] / smooth[p] - 1);
-          out[d][e] = Math.max(Math.max(FLOOR, noise), Math.max(change[d][e], before));
+          double left = same ? claimed[d][e] : Math.max(change[d][e], before);
+          out[d][e] = Math.max(noise, left);
         }
       }
     }

@@ -3,14 +3,22 @@ package org.edgefield.field.bem.solve;
 import org.edgefield.importer.mesh.SurfaceMesh;
 
 /**
- * Where the next mesh should be finer: element widths are cut where the field of some duty comes
- * near the peak of its electrode, and where raw and recovered values part by more than the
- * accuracy.
+ * Where the next mesh should be finer: at the peaks, where the field near them still bends within
+ * an element, where raw and recovered values part, and in narrow gaps. Electrodes whose peaks are
+ * good already ask for nothing.
  */
 final class Refinement {
+  /** Share of the peak above which elements are always cut. */
+  private static final double AT_PEAK = 0.97;
+
+  /** Share of the peak above which elements are cut where the field bends. */
   private static final double NEAR_PEAK = 0.6;
-  private static final double CUT_AT_PEAK = 0.55;
+
+  /** Departure from the neighbours' mean, over accuracy and peak, that counts as a bend. */
+  private static final double BEND = 0.25;
+
   private static final double CUT_AT_ERROR = 0.7;
+  private static final double FIRST_CUT = 0.55;
 
   private Refinement() {}
 
@@ -19,33 +27,65 @@ final class Refinement {
    *
    * @param width element width per vertex, from {@link #widths}
    * @param gaps wanted sizes in narrow gaps
+   * @param uncertainty claimed per duty and electrode
+   * @param first whether this is the first level, whose uncertainties are not to be trusted
    */
-  static double[] targets(Level level, double[] width, GapCheck gaps, double accuracy) {
+  static double[] targets(
+      Level level,
+      double[] width,
+      GapCheck gaps,
+      double[][] uncertainty,
+      double accuracy,
+      boolean first) {
     ChargedSurface surface = level.surface();
     double[] target = gaps.target_m().clone();
-    int electrodes = level.units().charge_C().length;
     for (int d = 0; d < level.raw().size(); d++) {
       double[] raw = level.raw().get(d);
       double[] smooth = level.recovered().get(d);
-      double[] peak = new double[electrodes];
-      for (int e = 0; e < electrodes; e++) {
+      double[] bend = bends(surface, smooth);
+      for (int e = 0; e < uncertainty[d].length; e++) {
         int p = level.peak(d, e);
-        peak[e] = p < 0 ? Double.POSITIVE_INFINITY : smooth[p];
-      }
-      for (int i = 0; i < raw.length; i++) {
-        if (surface.seam()[i]) {
+        if (p < 0 || (!first && uncertainty[d][e] <= accuracy)) {
           continue;
         }
-        double top = peak[surface.electrode()[i]];
-        int v = level.nodes().nodeVertex()[surface.unknownNode()[i]];
-        if (smooth[i] > NEAR_PEAK * top) {
-          target[v] = Math.min(target[v], CUT_AT_PEAK * width[v]);
-        } else if (Math.abs(raw[i] - smooth[i]) > 2 * accuracy * top) {
-          target[v] = Math.min(target[v], CUT_AT_ERROR * width[v]);
+        double top = smooth[p];
+        // Errors go with the square of the size.
+        double cut =
+            first
+                ? FIRST_CUT
+                : Math.max(0.5, Math.min(0.7, 0.85 * Math.sqrt(accuracy / uncertainty[d][e])));
+        for (int i = 0; i < raw.length; i++) {
+          if (surface.electrode()[i] != e || surface.seam()[i]) {
+            continue;
+          }
+          int v = level.nodes().nodeVertex()[surface.unknownNode()[i]];
+          double error = Math.abs(raw[i] - smooth[i]) / (accuracy * top);
+          double bent = Math.max(error, bend[i] / (accuracy * top));
+          if (smooth[i] > AT_PEAK * top || (smooth[i] > NEAR_PEAK * top && bent > BEND)) {
+            target[v] = Math.min(target[v], cut * width[v]);
+          } else if (error > 2) {
+            target[v] = Math.min(target[v], CUT_AT_ERROR * width[v]);
+          }
         }
       }
     }
     return target;
+  }
+
+  /** How far each value lies from the mean of its neighbours. */
+  private static double[] bends(ChargedSurface surface, double[] value) {
+    double[] sum = new double[value.length];
+    int[] count = new int[value.length];
+    int[] corner = surface.cornerUnknown();
+    for (int c = 0; c < corner.length; c++) {
+      int base = c - c % 3;
+      sum[corner[c]] += value[corner[base + (c + 1) % 3]] + value[corner[base + (c + 2) % 3]];
+      count[corner[c]] += 2;
+    }
+    for (int i = 0; i < sum.length; i++) {
+      sum[i] = Math.abs(sum[i] / count[i] - value[i]);
+    }
+    return sum;
   }
 
   // Mean height of the triangles around a vertex, brought to the side of an equilateral one.
