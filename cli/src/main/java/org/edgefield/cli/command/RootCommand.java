@@ -68,6 +68,7 @@ final class RootCommand implements Runnable {
         .addSubcommand(new PartsCommand(console))
         .addSubcommand(new DraftCommand(console))
         .addSubcommand(new ScreenCommand(console))
-        .addSubcommand(new SolveCommand(console));
+        .addSubcommand(new SolveCommand(console))
+        .addSubcommand(new GateCommand(console));
   }
 }
