@@ -18,11 +18,11 @@ import org.edgefield.importer.brep.Assembly;
 
 /** What the board beside the model says of one duty. */
 final class LegendBoard {
-  private static final int LISTED = 5;
+  private static final int LISTED = 4;
   private static final double TITLE = 46;
   private static final double HEADING = 36;
-  private static final double BODY = 27;
-  private static final double SMALL = 21;
+  private static final double BODY = 29;
+  private static final double SMALL = 23;
   private static final int WHITE = 0xffffff;
   private static final int SCALE_HEIGHT = 84;
   private static final String CAUTION =
@@ -182,7 +182,10 @@ final class LegendBoard {
               + Words.utilisation(spot.utilisation())
               + ") "
               + place(spot);
-      board.entry(Integer.toString(spot.id()), text, SMALL + 3, Board.INK);
+      board.entry(Integer.toString(spot.id()), text, SMALL + 2, Board.INK);
+      if (spot.utilisation() >= 1) {
+        board.entry("", "mend: " + Words.cure(spot.cure()), SMALL, Board.FAINT);
+      }
     }
     if (spots.size() > PinNodes.MOST) {
       board.line("Pins stand at the first " + PinNodes.MOST + ".", SMALL, Board.FAINT);

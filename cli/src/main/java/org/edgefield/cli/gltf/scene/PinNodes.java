@@ -125,6 +125,8 @@ final class PinNodes {
           .put("field_V_per_m", spot.field_V_per_m())
           .put("permitted_V_per_m", spot.permitted_V_per_m())
           .put("utilisation", spot.utilisation())
+          .put("law", spot.law().text())
+          .put("cure", Words.cure(spot.cure()))
           .putArray("at_m")
           .add(spot.at_m()[0])
           .add(spot.at_m()[1])

@@ -1,5 +1,7 @@
 package org.edgefield.cli.gltf.scene;
 
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Locale;
 import org.edgefield.field.result.HotSpot;
 import org.edgefield.importer.brep.Part;
@@ -42,6 +44,24 @@ final class Words {
     double hundredths = 100 * utilisation;
     double rounded = utilisation < 1 ? Math.floor(hundredths) : Math.rint(hundredths);
     return String.format(Locale.ROOT, "%.2f", rounded / 100);
+  }
+
+  /**
+   * What would mend a hot spot, each alone: "radius 12 mm, 62 % of the voltage, or gap 80 mm". Ways
+   * that do not exist are left out.
+   */
+  static String cure(HotSpot.Cure cure) {
+    List<String> ways = new ArrayList<>();
+    if (Double.isFinite(cure.radius_m())) {
+      ways.add("radius " + millimetres(cure.radius_m()) + " mm");
+    }
+    if (Double.isFinite(cure.voltageFactor())) {
+      ways.add(digits(100 * cure.voltageFactor(), 2) + " % of the voltage");
+    }
+    if (Double.isFinite(cure.gap_m())) {
+      ways.add("gap " + millimetres(cure.gap_m()) + " mm");
+    }
+    return String.join(" or ", ways);
   }
 
   /** A file's name without its folders: a heatmap that is passed on tells nothing of them. */

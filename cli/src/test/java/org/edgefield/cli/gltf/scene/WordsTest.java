@@ -2,6 +2,7 @@ package org.edgefield.cli.gltf.scene;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import org.edgefield.field.result.HotSpot;
 import org.junit.jupiter.api.Test;
 
 final class WordsTest {
@@ -24,6 +25,14 @@ final class WordsTest {
     assertThat(Words.voltage(70710)).isEqualTo("70.7 kV");
     assertThat(Words.voltage(0)).isEqualTo("0 kV");
     assertThat(Words.voltage(100e3)).isEqualTo("100 kV");
+  }
+
+  @Test
+  void curesNameTheWaysThereAre() {
+    assertThat(Words.cure(new HotSpot.Cure(0.012, 5e4, 0.62, 0.08)))
+        .isEqualTo("radius 12 mm or 62 % of the voltage or gap 80 mm");
+    assertThat(Words.cure(new HotSpot.Cure(Double.NaN, 5e4, 0.062, Double.NaN)))
+        .isEqualTo("6.2 % of the voltage");
   }
 
   @Test
