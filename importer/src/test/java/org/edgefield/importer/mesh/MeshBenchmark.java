@@ -43,7 +43,7 @@ public final class MeshBenchmark {
     if (files.length == 0) {
       MeshSettings fine = new MeshSettings(32, 8, Double.POSITIVE_INFINITY, 0.01, 1, 0.4);
       AnalyticBody torus = AnalyticBody.torus(1, 0.02, 24, 12);
-      MeshSettings half = new MeshSettings(24, 8, Double.POSITIVE_INFINITY, 0.0075, 1, 0.4);
+      MeshSettings half = new MeshSettings(39, 8, Double.POSITIVE_INFINITY, 0.01, 1, 0.4);
       AnalyticBody spheres = AnalyticBody.sphere(1, 9).addSphere(1, 4, 0, 0, 9);
       for (int i = 0; i < RUNS; i++) {
         run("torus, one part", torus, torus.mesh(), fine);

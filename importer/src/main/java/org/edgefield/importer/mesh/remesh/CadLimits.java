@@ -16,7 +16,7 @@ final class CadLimits {
   private static final double TOO_SHORT = 0.6;
 
   /** Smallest share to which a size is lowered; thinner slivers of the model stay slivers. */
-  private static final double LEAST_SHARE = 1.0 / 256;
+  private static final double LEAST_SHARE = 1.0 / 128;
 
   private final HalfEdgeMesh mesh;
   private final VertexField field;
@@ -105,7 +105,9 @@ final class CadLimits {
       }
       int at = Metric.STRIDE * v;
       double square = Metric.square(field.metric, at, dx, dy, dz);
-      if (square < TOO_SHORT * TOO_SHORT && square > LEAST_SHARE * LEAST_SHARE) {
+      // Against the ungraded size, which does not follow the mesh into a cusp.
+      double ungraded = Metric.square(field.raw, at, dx, dy, dz);
+      if (square < TOO_SHORT * TOO_SHORT && ungraded > LEAST_SHARE * LEAST_SHARE) {
         double d = Math.sqrt(d2);
         Metric.addOuter(field.metric, at, (1 - square) / d2, dx / d, dy / d, dz / d);
         Metric.setIsotropic(wide, 0, maxAspect * d);

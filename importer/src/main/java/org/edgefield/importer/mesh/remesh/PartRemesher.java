@@ -10,10 +10,10 @@ import org.edgefield.importer.mesh.size.VertexField;
  * short ones, flips and relaxes, until little changes. Deterministic.
  *
  * <p>CAD vertices and CAD edges are kept, seams included. Where the CAD model itself has slivers
- * thinner than 1/256 of the size around, elements there stay slivers.
+ * thinner than 1/128 of the size around, elements there stay slivers.
  */
 public final class PartRemesher {
-  private static final int PASSES = 5;
+  private static final int PASSES = 6;
   private static final int SPLIT_ROUNDS = 80;
   private static final int COLLAPSE_ROUNDS = 3;
 
@@ -25,6 +25,9 @@ public final class PartRemesher {
 
   /** Splits per triangle of a round that is not worth another one; the next pass goes on. */
   private static final double FEW = 0.002;
+
+  /** Triangles over the number wanted up to which another pass follows narrow places. */
+  private static final double COARSE = 0.8;
 
   /** Triangles over the number wanted from which on they are thinned out. */
   private static final double CROWDED = 1.15;
@@ -78,7 +81,7 @@ public final class PartRemesher {
       relax(2, 0.9);
       w.refreshAll(true);
       Flipper.run(w);
-      if (pass > 0 && changes < SETTLED * w.mesh.living) {
+      if (pass > 0 && changes < SETTLED * w.mesh.living && w.mesh.living > COARSE * wanted()) {
         break;
       }
     }
@@ -112,19 +115,25 @@ public final class PartRemesher {
       int n = collapser.round(1, Integer.MAX_VALUE);
       total += n;
       Flipper.run(w);
-      if (n == 0) {
+      if (n <= FEW * w.mesh.living) {
         break;
       }
     }
     return total;
   }
 
+  /** Number of triangles that the size field integrates to. */
+  private double wanted() {
+    double sum = 0;
+    for (int t = 0; t < w.mesh.triangles; t++) {
+      sum += w.mesh.face[t] < 0 ? 0 : Shape.elements(w.mesh, w.field, t);
+    }
+    return sum;
+  }
+
   /** Collapses more where regular patterns hold many more triangles than the field asks for. */
   private void thin() {
-    double wanted = 0;
-    for (int t = 0; t < w.mesh.triangles; t++) {
-      wanted += w.mesh.face[t] < 0 ? 0 : Shape.elements(w.mesh, w.field, t);
-    }
+    double wanted = wanted();
     double excess = w.mesh.living / wanted;
     if (excess > CROWDED) {
       // A vertex takes two triangles with it.
