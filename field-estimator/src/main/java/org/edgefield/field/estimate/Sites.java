@@ -106,10 +106,7 @@ final class Sites {
       // A round end or sphere grows in both directions, a rod in one.
       double b = Math.min(k2[site], a);
       return tube.smooth(
-          a,
-          Math.min(c1[site], Math.max(c1[site] * scale, a * a)),
-          b,
-          Math.min(c2[site], Math.max(c2[site] * scale, b * b)));
+          a, rescaled(c1[site], k1[site], scale), b, rescaled(c2[site], k2[site], b / k2[site]));
     }
     double t = Math.max(thickness[site], 2 * r);
     double w = Math.max(width[site], 2 * r);
@@ -117,5 +114,13 @@ final class Sites {
       return tube.corner(wedge[site], r, t, w, end2[site]);
     }
     return tube.edge(wedge[site], r, t, w, k2[site], c2[site]);
+  }
+
+  /**
+   * Quadratic term of a direction whose curvature is scaled: that of a whole round (k^2) goes with
+   * the square, that of an ellipsoid's end (k / a) with the first power, others between.
+   */
+  private static double rescaled(double c, double k, double scale) {
+    return k > 0 ? c * Math.pow(scale, 1 + Math.min(1, c / (k * k))) : c;
   }
 }

@@ -5,21 +5,24 @@
  * the cross-section), from the tests of this package and the studies behind its constants:
  *
  * <ul>
- *   <li>parallel plates, coaxial cylinders, concentric and isolated spheres: exact but for the mesh;
+ *   <li>parallel plates, coaxial cylinders, concentric and isolated spheres: exact but for the
+ *       mesh;
  *   <li>sphere over earth plane, gap 0.05 to 20 radii: 1.02 to 1.13;
  *   <li>two equal spheres: at the live one 1.01 to 1.15, at opposed voltages 1.01 to 1.13, at the
  *       earthed one 1.01 to 1.41 (widest gaps);
  *   <li>round-ended rod over earth plane, gap 0.5 to 100 radii: 1.02 to 1.12;
  *   <li>isolated spheroids up to 10:1: 1.00 to 1.24; isolated tori: 1.08 to 1.12;
  *   <li>half-ellipsoids and rods in an ambient field: 1.00, flat ones 1.05;
- *   <li>rounded bar, radius over thickness 0.01 to 0.35, width 1 to 10 thicknesses, in a round shell
- *       0.97 to 1.24, over a plane at 1 to 30 thicknesses 1.04 to 1.37; in a box 1.03 to 1.06;
+ *   <li>rounded bar, radius over thickness 0.01 to 0.35, width 1 to 10 thicknesses, in a round
+ *       shell 0.97 to 1.24, over a plane at 1 to 30 thicknesses 1.04 to 1.37; in a box 1.03 to
+ *       1.06;
  *   <li>corner of the isolated cube: about 1.04 rounded, 1.14 as made.
  * </ul>
  *
- * <p>Where it is weak: flanks of slender bodies, away from the peak, down to 0.6; bodies sheltered by
- * a neighbour at the same voltage, up to 1.6 and more; corners sharper than right-angled ones, up to
- * 2.2; bodies whose bounding box says little of them (bent, hollow, slanting); floating electrodes,
- * which are given the widest voltage difference of the duty. Field lines are taken as circular arcs.
+ * <p>Where it is weak: flanks of slender bodies, away from the peak, down to 0.6; bodies sheltered
+ * by a neighbour at the same voltage, up to 1.6 and more; corners sharper than right-angled ones,
+ * up to 2.2; bodies whose bounding box says little of them (bent, hollow, slanting); floating
+ * electrodes, which are given the widest voltage difference of the duty. Field lines are taken as
+ * circular arcs.
  */
 package org.edgefield.field.estimate;

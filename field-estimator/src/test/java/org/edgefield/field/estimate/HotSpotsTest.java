@@ -88,7 +88,9 @@ class HotSpotsTest {
       assertThat(s.nodes()).isSorted();
       for (int n : s.nodes()) {
         double e = r.field().field_V_per_m()[n];
-        assertThat(e).isGreaterThanOrEqualTo(0.8 * PERMITTED).isLessThanOrEqualTo(s.field_V_per_m());
+        assertThat(e)
+            .isGreaterThanOrEqualTo(0.8 * PERMITTED)
+            .isLessThanOrEqualTo(s.field_V_per_m());
       }
     }
   }
