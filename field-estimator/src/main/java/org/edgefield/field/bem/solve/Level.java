@@ -20,6 +20,7 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  * @param nodes its smooth-patch nodes
  * @param surface charged part of it
  * @param units solved densities
+ * @param edgeZone per unknown, whether it lies on a sharp edge or too near to one to have a peak
  * @param raw per duty, magnitude over the cycle at every unknown, V/m
  * @param recovered the same, smoothed
  */
@@ -28,6 +29,7 @@ record Level(
     SurfaceNodes nodes,
     ChargedSurface surface,
     UnitFields units,
+    boolean[] edgeZone,
     List<double[]> raw,
     List<double[]> recovered) {
 
@@ -62,7 +64,19 @@ record Level(
       raw.add(magnitude(weights, units.density()));
       recovered.add(magnitude(weights, smooth));
     }
-    return new Level(mesh, nodes, surface, units, raw, recovered);
+    int[] partOfUnknown = new int[surface.unknowns()];
+    for (int c = 0; c < surface.cornerUnknown().length; c++) {
+      partOfUnknown[surface.cornerUnknown()[c]] =
+          assembly.geometry().facePart(mesh.triangleFace()[surface.meshTriangle()[c / 3]]);
+    }
+    boolean[] zone =
+        EdgeZone.of(
+            assembly,
+            surface,
+            partOfUnknown,
+            fieldCase.edges(),
+            fieldCase.surroundings().earthPlane());
+    return new Level(mesh, nodes, surface, units, zone, raw, recovered);
   }
 
   // Only the normal component exists on a conductor, so the peak over the cycle is the modulus.
@@ -75,16 +89,17 @@ record Level(
   }
 
   /**
-   * Unknown with the highest recovered field of a duty on an electrode, borders left out.
+   * Unknown with the highest recovered field of a duty on an electrode, sharp edges and their zones
+   * left out.
    *
-   * @return unknown, -1 where the electrode has none off a border
+   * @return unknown, -1 where the electrode has none off an edge zone
    */
   int peak(int duty, int electrode) {
     int best = -1;
     double[] value = recovered.get(duty);
     for (int i = 0; i < value.length; i++) {
       if (surface.electrode()[i] == electrode
-          && !surface.seam()[i]
+          && !edgeZone[i]
           && (best < 0 || value[i] > value[best])) {
         best = i;
       }

@@ -1,0 +1,68 @@
+package org.edgefield.field.bem.solve;
+
+import java.util.Arrays;
+import org.edgefield.field.job.EdgesAsMade;
+import org.edgefield.field.job.Surroundings.EarthPlane;
+import org.edgefield.importer.brep.Assembly;
+import org.edgefield.importer.brep.Part;
+import org.edgefield.importer.mesh.spatial.TriangleCursor;
+import org.edgefield.importer.mesh.spatial.TriangleTree;
+
+/**
+ * Surface so close to a border of its patch that the field follows the singularity of an edge drawn
+ * sharp: it grows without limit as elements shrink, and no mesh gives it a peak. The zone has a
+ * width that does not depend on the mesh: five times the edge radius as made, at least a tenth of
+ * the part's least dimension.
+ */
+final class EdgeZone {
+  private static final double RADII = 5;
+  private static final double SHARE = 0.1;
+
+  private EdgeZone() {}
+
+  /** Mark per unknown: on a border or in the zone beside one. */
+  static boolean[] of(
+      Assembly assembly,
+      ChargedSurface surface,
+      int[] partOfUnknown,
+      EdgesAsMade edges,
+      EarthPlane plane) {
+    int n = surface.unknowns();
+    boolean[] zone = surface.seam().clone();
+    double[] x = surface.position();
+    // Points are kept as triangles without extent.
+    int[] corners = new int[3 * n];
+    int[] group = new int[n];
+    for (int i = 0; i < n; i++) {
+      Arrays.fill(corners, 3 * i, 3 * i + 3, i);
+      group[i] = surface.seam()[i] && !inPlane(x, i, plane) ? partOfUnknown[i] : -1;
+    }
+    TriangleTree tree = TriangleTree.build(x, corners, group);
+    TriangleCursor cursor = tree.cursor();
+    int allowed = -1;
+    for (int i = 0; i < n; i++) {
+      int part = partOfUnknown[i];
+      if (zone[i] || part >= tree.groupCount()) {
+        continue;
+      }
+      if (allowed != part) {
+        cursor.allowOnly(part);
+        allowed = part;
+      }
+      double width =
+          Math.max(RADII * edges.radius_m(part), SHARE * least(assembly.parts().get(part)));
+      zone[i] = cursor.nearest(x[3 * i], x[3 * i + 1], x[3 * i + 2], width);
+    }
+    return zone;
+  }
+
+  /** A body that stands on the earth plane has no sharp edge there. */
+  private static boolean inPlane(double[] x, int i, EarthPlane plane) {
+    return plane != null && Math.abs(x[3 * i + plane.axis()] - plane.offset_m()) < 1e-9;
+  }
+
+  private static double least(Part part) {
+    double[] b = part.bounds_m();
+    return Math.min(b[3] - b[0], Math.min(b[4] - b[1], b[5] - b[2]));
+  }
+}
