@@ -28,8 +28,8 @@ import org.edgefield.importer.mesh.SurfaceMesher;
  *
  * <p>The claimed uncertainty of a peak is the largest of the error that its change since the level
  * before lets expect, a quarter of the change before that (a change can be small by chance), the
- * distance of raw and recovered value, and a floor of 0.1 %. Sharp edges drawn without a radius
- * have no finite field; there the estimate's value for the edge as made stands.
+ * distance of raw and recovered value, and a floor of 0.1 %, half as much again. Sharp edges drawn
+ * without a radius have no finite field; there the estimate's value for the edge as made stands.
  */
 public final class FieldSolver {
   private static final int LEVELS = 6;
@@ -156,8 +156,8 @@ public final class FieldSolver {
   /**
    * Errors that remain, per duty and electrode, from the change of the peaks since the level before
    * and the ratio r of element widths there: with errors that go as the square of the width, r^2/(1
-   * - r^2) of the change is left. Infinite where an electrode's elements stayed as they were; 0
-   * where there is nothing to compare.
+   * - r^2) of the change is left; likewise the distance from where the raw peaks head for. Infinite
+   * where an electrode's elements stayed as they were; 0 where there is nothing to compare.
    */
   private static double[][] changes(Level before, Level now, FieldCase fieldCase) {
     double[][] out = new double[fieldCase.duties().size()][fieldCase.electrodes().size()];
@@ -177,7 +177,14 @@ public final class FieldSolver {
               widthNow[now.nodes().nodeVertex()[now.surface().unknownNode()[p]]]
                   / widthBefore[before.nodes().nodeVertex()[before.surface().unknownNode()[q]]];
           double left = ratio * ratio / (1 - ratio * ratio);
-          out[d][e] = ratio > UNCHANGED ? Double.POSITIVE_INFINITY : change * Math.max(1, left);
+          // Raw peaks come down with the square of the width: where they head for.
+          double raw = now.raw().get(d)[p];
+          double limit = raw + left * (raw - before.raw().get(d)[q]);
+          double off = value > 0 ? Math.abs(limit / value - 1) : 0;
+          out[d][e] =
+              ratio > UNCHANGED
+                  ? Double.POSITIVE_INFINITY
+                  : Math.max(off, change * Math.max(1, left));
         }
       }
     }
