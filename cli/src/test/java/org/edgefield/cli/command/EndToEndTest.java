@@ -1,0 +1,125 @@
+package org.edgefield.cli.command;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
+import com.networknt.schema.JsonSchemaFactory;
+import com.networknt.schema.SpecVersion.VersionFlag;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
+import java.io.PrintStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.Map;
+import org.edgefield.cli.Version;
+import org.edgefield.cli.console.Console;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+class EndToEndTest {
+  private static final Path DEMO = Path.of("../test-models/demo");
+
+  @TempDir Path folder;
+
+  private record Run(int code, String out, String err) {}
+
+  private static Run run(int width, Object... args) {
+    ByteArrayOutputStream out = new ByteArrayOutputStream();
+    ByteArrayOutputStream err = new ByteArrayOutputStream();
+    Console console =
+        new Console(
+            new PrintStream(out, true, StandardCharsets.UTF_8),
+            new PrintStream(err, true, StandardCharsets.UTF_8),
+            false,
+            false,
+            width,
+            Map.of());
+    int code =
+        CommandLineRun.run(
+            console, Arrays.stream(args).map(String::valueOf).toArray(String[]::new));
+    return new Run(
+        code, out.toString(StandardCharsets.UTF_8), err.toString(StandardCharsets.UTF_8));
+  }
+
+  private static JsonNode valid(String text, String schema) throws IOException {
+    JsonNode tree = new ObjectMapper().readTree(text);
+    assertThat(
+            JsonSchemaFactory.getInstance(VersionFlag.V202012)
+                .getSchema(Version.class.getResourceAsStream(schema))
+                .validate(tree))
+        .isEmpty();
+    return tree;
+  }
+
+  @Test
+  void screenWritesAValidResultThatIsTheSameEachTime() throws IOException {
+    Path a = folder.resolve("a");
+    Files.createDirectory(a);
+    Files.writeString(a.resolve("notes.txt"), "mine");
+    Run first = run(80, "screen", DEMO.resolve("compartment.yaml"), "--out", a);
+    Run second =
+        run(80, "screen", DEMO.resolve("compartment.yaml"), "--out", folder.resolve("b"), "--json");
+    assertThat(first.code()).isEqualTo(1);
+    assertThat(first.out().lines()).allMatch(line -> line.length() <= 80);
+    assertThat(a.resolve("notes.txt")).hasContent("mine");
+    assertThat(a.resolve("heatmap.glb")).isNotEmptyFile();
+    assertThat(a.resolve("summary.md")).content().contains("type test");
+    String json = Files.readString(a.resolve("result.json"));
+    JsonNode tree = valid(json, "result.schema.json");
+    assertThat(tree.get("verdict").textValue()).isEqualTo("red");
+    assertThat(second.out()).isEqualTo(Files.readString(folder.resolve("b/result.json")));
+    assertThat(withoutTiming(second.out())).isEqualTo(withoutTiming(json));
+    try (var left = Files.list(folder)) {
+      assertThat(left).allMatch(p -> !p.getFileName().toString().startsWith("."));
+    }
+  }
+
+  private static String withoutTiming(String json) {
+    return json.substring(0, json.indexOf("\"timing\""));
+  }
+
+  @Test
+  void gatePassesTheSameAndFailsTheWorseModel() throws IOException {
+    Path accepted = folder.resolve("accepted.json");
+    Path demo = DEMO.resolve("compartment.yaml");
+    assertThat(run(80, "gate", demo, "--accepted", accepted).code()).isEqualTo(2);
+    assertThat(run(80, "gate", demo, "--accepted", accepted, "--accept").code()).isZero();
+    valid(Files.readString(accepted), "accepted.schema.json");
+    Run same = run(80, "gate", demo, "--accepted", accepted, "--json");
+    assertThat(same.code()).isZero();
+    assertThat(new ObjectMapper().readTree(same.out()).findValuesAsText("change"))
+        .containsOnly("same");
+    Run worse = run(80, "gate", DEMO.resolve("compartment-worse.yaml"), "--accepted", accepted);
+    assertThat(worse.code()).isEqualTo(1);
+    assertThat(worse.out()).contains("Busbar L3", "FAIL", "gate: fail");
+    assertThat(worse.out().lines()).allMatch(line -> line.length() <= 80);
+  }
+
+  @Test
+  void draftedCaseCanBeScreenedAndIsNotOverwritten() {
+    Path model = DEMO.resolve("../step/demo-compartment.step");
+    Path draft = folder.resolve("draft.yaml");
+    assertThat(run(80, "draft", model, "-o", draft).code()).isZero();
+    assertThat(run(80, "screen", draft, "-q", "--out", folder.resolve("d")).code()).isIn(0, 1);
+    Run again = run(80, "draft", model, "-o", draft);
+    assertThat(again.code()).isEqualTo(2);
+    assertThat(again.err()).contains("--force");
+  }
+
+  @Test
+  void faultsAreOneLineWithTheirCode() throws IOException {
+    Path empty = Files.createFile(folder.resolve("empty.step"));
+    assertThat(run(80, "parts", empty).code()).isEqualTo(3);
+    Run missing = run(80, "screen", folder.resolve("none.yaml"));
+    assertThat(missing.code()).isEqualTo(2);
+    assertThat(missing.err().lines()).hasSize(1);
+    Run taken = run(80, "screen", DEMO.resolve("compartment.yaml"), "--out", empty);
+    assertThat(taken.code()).isEqualTo(2);
+    assertThat(taken.err()).contains("is a file");
+    assertThat(run(80, "scren").code()).isEqualTo(2);
+    assertThat(run(60, "gate", "--help").out()).contains("Examples:");
+  }
+}
