@@ -19,8 +19,8 @@ import picocli.CommandLine.Spec;
       "Examples:",
       "  edgefield parts compartment.step              what is in the model",
       "  edgefield draft compartment.step              a starter case file",
-      "  edgefield screen compartment.yaml             hot spots in seconds, with a heatmap",
-      "  edgefield solve compartment.yaml              the true field, to 1 %",
+      "  edgefield screen compartment.yaml             hot spots in seconds, a heatmap",
+      "  edgefield solve compartment.yaml              the field solved, to 1 %%",
       "  edgefield gate compartment.yaml --accepted accepted.json",
       "                                                fail on new or worse red regions",
       ""

@@ -13,8 +13,8 @@ import picocli.CommandLine.Mixin;
 @Command(
     name = "solve",
     header = {
-      "The true field on the conductors, solved by boundary elements and refined until the peak of",
-      "every electrode and duty is as accurate as asked.",
+      "The field solved by boundary elements, to a stated accuracy.",
+      "The mesh is refined until the peak of every electrode and duty is as accurate as asked.",
       "",
       "Examples:",
       "  edgefield solve compartment.yaml",
