@@ -401,7 +401,9 @@ final class SiteBuilder {
       sites.k1[s] = 1 / radius;
       sites.k2[s] = corner ? 1 / radius : patches[s] > 1 && sum > 0.1 ? along[s] / sum : 0;
       sites.end2[s] = end;
-      sites.c2[s] = Math.max(end, sites.k2[s] > 0 ? sites.k2[s] * sites.k2[s] : 0);
+      // A short arc along the edge spreads the flux only at first; beyond it the body's length
+      // counts.
+      sites.c2[s] = corner ? Math.max(end, sites.k2[s] * sites.k2[s]) : end;
       behind(sites, s, v, radius, part, cursor);
     }
   }
