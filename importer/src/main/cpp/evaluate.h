@@ -59,6 +59,15 @@ inline CurvaturePoint ordered(const Vec3& n, double ka, const Vec3& a, double kb
   return ka >= kb ? CurvaturePoint{n, ka, kb, a, b} : CurvaturePoint{n, kb, ka, b, a};
 }
 
+// Shape operator given in an orthonormal tangent frame (e1, e2 = n x e1).
+inline CurvaturePoint principal(const Vec3& n, const Vec3& e1, double w11, double w12, double w22) {
+  const double mean = 0.5 * (w11 + w22), half = 0.5 * (w11 - w22);
+  const double r = std::hypot(half, w12);
+  const double angle = r == 0 ? 0 : 0.5 * std::atan2(w12, half);
+  const Vec3 d1 = plus(scaled(e1, std::cos(angle)), cross(n, e1), std::sin(angle));
+  return {n, mean + r, mean - r, d1, cross(n, d1)};
+}
+
 // Curvature of a surface known only through its derivatives: eigenvalues of the shape operator in an
 // orthonormal tangent frame. Returns false where the parametrisation is singular.
 inline bool generalCurvature(const Model& m, int face, double u, double v, CurvaturePoint& out) {
@@ -78,16 +87,79 @@ inline bool generalCurvature(const Model& m, int face, double u, double v, Curva
   const double w11 = l / (a * a);
   const double w12 = (mixed - a * b * w11) / (a * c);
   const double w22 = (nn - b * b * w11 - 2 * b * c * w12) / (c * c);
-  const double mean = 0.5 * (w11 + w22), half = 0.5 * (w11 - w22);
-  const double r = std::hypot(half, w12);
-  const double angle = r == 0 ? 0 : 0.5 * std::atan2(w12, half);
-  const Vec3 d1 = plus(scaled(e1, std::cos(angle)), e2, std::sin(angle));
-  out = {n, mean + r, mean - r, d1, cross(n, d1)};
+  out = principal(n, e1, w11, w12, w22);
   return std::isfinite(out.k1) && std::isfinite(out.k2);
 }
 
+// Curvature at a pole, where one parameter moves nothing. Each line of the other parameter leaves the pole in a
+// direction of its own, with a normal from the mixed derivative and a normal curvature from the second one, so nothing
+// has to be extrapolated; the curvatures of eight directions give the shape operator by least squares. Returns false
+// where the lines leave a point that has no tangent plane (an apex).
+inline bool poleCurvature(const Model& m, int face, double u, double v, CurvaturePoint& out) {
+  const FaceData& f = m.faces[face];
+  const SurfacePoint q = surfaceAt(m, face, u, v);
+  const bool alongU = norm(q.du) * f.vSpeed > norm(q.dv) * f.uSpeed;
+  const int range = alongU ? 2 : 0;
+  const double inward = alongU ? 0.5 * (f.bounds[0] + f.bounds[1]) - u : 0.5 * (f.bounds[2] + f.bounds[3]) - v;
+  const double turn = (inward < 0 ? -1 : 1) * f.sign;
+  Vec3 n{}, e1{}, e2{};
+  double a[3][4] = {};
+  double scale = 0, misfit = 0;
+  std::array<std::array<double, 4>, 9> rows{};
+  for (int i = 0; i <= 8; i++) {
+    const double w = f.bounds[range] + (f.bounds[range + 1] - f.bounds[range]) * (i - 0.5) / 8;
+    gp_Pnt p;
+    gp_Vec gu, gv, guu, gvv, guv;
+    m.surface(face).D2(alongU || i == 0 ? u : w, alongU && i > 0 ? w : v, p, gu, gv, guu, gvv, guv);
+    const Vec3 along = vec((alongU ? gu : gv).XYZ()), mixed = vec(guv.XYZ());
+    const Vec3 raw = alongU ? cross(along, mixed) : cross(mixed, along);
+    const double length = norm(along), area = norm(raw);
+    if (!(area > 1e-9 * length * norm(mixed)) || !(length > 0)) return false;
+    const Vec3 here = scaled(raw, turn / area);
+    if (i == 0) {
+      n = here;
+      e1 = scaled(plus(along, n, -dot(along, n)), 1 / length);
+      e1 = scaled(e1, 1 / norm(e1));
+      e2 = cross(n, e1);
+    } else if (norm(cross(n, here)) > 1e-6) {
+      return false;
+    }
+    const double x = dot(along, e1) / length, y = dot(along, e2) / length;
+    const double k = -dot(vec((alongU ? guu : gvv).XYZ()), n) / (length * length);
+    rows[i] = {x * x, 2 * x * y, y * y, k};
+    scale = std::max(scale, std::abs(k));
+    for (int r = 0; r < 3; r++) {
+      for (int c = 0; c < 4; c++) a[r][c] += rows[i][r] * rows[i][c];
+    }
+  }
+  double w[3];
+  for (int r = 0; r < 3; r++) {
+    int pivot = r;
+    for (int i = r + 1; i < 3; i++) {
+      if (std::abs(a[i][r]) > std::abs(a[pivot][r])) pivot = i;
+    }
+    std::swap(a[r], a[pivot]);
+    if (!(std::abs(a[r][r]) > 1e-9)) return false;
+    for (int i = r + 1; i < 3; i++) {
+      const double g = a[i][r] / a[r][r];
+      for (int c = r; c < 4; c++) a[i][c] -= g * a[r][c];
+    }
+  }
+  for (int r = 2; r >= 0; r--) {
+    w[r] = a[r][3];
+    for (int c = r + 1; c < 3; c++) w[r] -= a[r][c] * w[c];
+    w[r] /= a[r][r];
+  }
+  for (const auto& row : rows) {
+    misfit = std::max(misfit, std::abs(row[0] * w[0] + row[1] * w[1] + row[2] * w[2] - row[3]));
+  }
+  out = principal(n, e1, w[0], w[1], w[2]);
+  return misfit <= 1e-3 * scale && std::isfinite(out.k1) && std::isfinite(out.k2);
+}
+
 // At poles and apexes the limit along the face: elementary surfaces in closed form, an apex with the curvature
-// at 1e-6 of the face's extent, others by stepping towards the middle of the face until the point is regular.
+// at 1e-6 of the face's extent, others from the lines that leave the pole, an apex among them by stepping towards the middle of
+// the face until the point is regular.
 inline CurvaturePoint curvatureAt(const Model& m, int face, double u, double v) {
   const FaceData& f = m.faces[face];
   const double s = f.sign * f.handed;
@@ -125,7 +197,8 @@ inline CurvaturePoint curvatureAt(const Model& m, int face, double u, double v) 
     default: {
       CurvaturePoint out{};
       const double um = 0.5 * (f.bounds[0] + f.bounds[1]), vm = 0.5 * (f.bounds[2] + f.bounds[3]);
-      for (double step = 0; step <= 1; step = step == 0 ? 1e-5 : 4 * step) {
+      if (generalCurvature(m, face, u, v, out) || poleCurvature(m, face, u, v, out)) return out;
+      for (double step = 1e-5; step <= 1; step *= 4) {
         if (generalCurvature(m, face, u + (um - u) * step, v + (vm - v) * step, out)) return out;
       }
       const SurfacePoint q = surfaceAt(m, face, um, vm);

@@ -30,6 +30,7 @@ public final class NodeBuilder {
   private final Features features;
   private final boolean acrossFaces;
   private final MeshIncidence incidence;
+  private final PoleParameters poles;
 
   private final int[] cornerNode;
   private int[] nodeVertex;
@@ -52,6 +53,7 @@ public final class NodeBuilder {
     this.features = features;
     this.acrossFaces = acrossFaces;
     incidence = new MeshIncidence(mesh);
+    poles = new PoleParameters(geometry, mesh);
     cornerNode = new int[mesh.triangles().length];
     int guess = mesh.vertexCount() + mesh.segmentCount() + 16;
     nodeVertex = new int[guess];
@@ -249,8 +251,7 @@ public final class NodeBuilder {
     double[] uv = new double[2 * points];
     for (int i = 0; i < points; i++) {
       face[i] = face(pointCorner[i]);
-      uv[2 * i] = mesh.cornerUv()[2 * pointCorner[i]];
-      uv[2 * i + 1] = mesh.cornerUv()[2 * pointCorner[i] + 1];
+      poles.parameters(pointCorner[i], uv, 2 * i);
     }
     int stride = ExactGeometry.CURVATURE_STRIDE;
     double[] c = CurvatureBatch.evaluate(geometry, face, uv);
