@@ -20,21 +20,25 @@ final class EdgeZone {
 
   private EdgeZone() {}
 
-  /** Mark per unknown: on a border or in the zone beside one. */
-  static boolean[] of(
+  /**
+   * Nearest border unknown per unknown of the zone (itself where it lies on a border), -1 outside
+   * it.
+   */
+  static int[] of(
       Assembly assembly,
       ChargedSurface surface,
       int[] partOfUnknown,
       EdgesAsMade edges,
       EarthPlane plane) {
     int n = surface.unknowns();
-    boolean[] zone = surface.seam().clone();
+    int[] zone = new int[n];
     double[] x = surface.position();
     // Points are kept as triangles without extent.
     int[] corners = new int[3 * n];
     int[] group = new int[n];
     for (int i = 0; i < n; i++) {
       Arrays.fill(corners, 3 * i, 3 * i + 3, i);
+      zone[i] = surface.seam()[i] ? i : -1;
       group[i] = surface.seam()[i] && !inPlane(x, i, plane) ? partOfUnknown[i] : -1;
     }
     TriangleTree tree = TriangleTree.build(x, corners, group);
@@ -42,7 +46,7 @@ final class EdgeZone {
     int allowed = -1;
     for (int i = 0; i < n; i++) {
       int part = partOfUnknown[i];
-      if (zone[i] || part >= tree.groupCount()) {
+      if (zone[i] >= 0 || part >= tree.groupCount()) {
         continue;
       }
       if (allowed != part) {
@@ -51,7 +55,9 @@ final class EdgeZone {
       }
       double width =
           Math.max(RADII * edges.radius_m(part), SHARE * least(assembly.parts().get(part)));
-      zone[i] = cursor.nearest(x[3 * i], x[3 * i + 1], x[3 * i + 2], width);
+      if (cursor.nearest(x[3 * i], x[3 * i + 1], x[3 * i + 2], width)) {
+        zone[i] = cursor.triangle();
+      }
     }
     return zone;
   }

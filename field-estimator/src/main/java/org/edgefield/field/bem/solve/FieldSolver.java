@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import org.edgefield.curvature.Features;
+import org.edgefield.field.bem.edge.SharpEdges;
 import org.edgefield.field.estimate.EstimateModel;
 import org.edgefield.field.gas.PermittedField;
 import org.edgefield.field.gas.PermittedFields;
@@ -40,6 +41,11 @@ public final class FieldSolver {
 
   /** Relative uncertainty claimed beside sharp edges, where no mesh resolves the field. */
   private static final double IN_EDGE_ZONE = 0.4;
+
+  /**
+   * Share of the highest field on an electrode's sharp edges below which its faces do not count.
+   */
+  private static final double BESIDE_EDGES = 0.5;
 
   /** Ratio of element widths above which a mesh counts as unchanged. */
   private static final double UNCHANGED = 0.9;
@@ -78,6 +84,9 @@ public final class FieldSolver {
     MeshRequest request = MeshRequest.NONE.withPartGroup(electrodeOfPart);
     SurfaceMesh mesh = SurfaceMesher.refine(assembly, start, meshSettings, request, progress);
     ContactCheck.refuseShorts(assembly, mesh, fieldCase);
+    EdgeRefinement edgeRefinement =
+        new EdgeRefinement(SharpEdges.of(assembly, mesh, features, electrodeOfPart));
+    double[][] edgeClaims = null;
     double farTolerance = Math.max(1e-7, Math.min(1e-5, 1e-3 * settings.accuracy()));
     Level level = null;
     double[][] uncertainty = null;
@@ -90,15 +99,33 @@ public final class FieldSolver {
         String label = "level " + number + ", ";
         Progress labelled = (phase, share, detail) -> progress.report(phase, share, label + detail);
         Level next =
-            Level.solve(assembly, features, mesh, fieldCase, farTolerance, workers, labelled);
+            Level.solve(
+                assembly,
+                features,
+                edgeRefinement.edges(),
+                mesh,
+                fieldCase,
+                farTolerance,
+                workers,
+                labelled);
         double[][] earlier = change;
         change = changes(level, next, fieldCase);
         uncertainty = uncertainties(next, change, earlier, uncertainty);
         double[] width = Refinement.widths(mesh);
         gaps = GapCheck.of(assembly, next, fieldCase, width);
-        converged = level != null && gaps.resolved() && worst(uncertainty) <= settings.accuracy();
+        edgeClaims = edgeRefinement.claims(next, fieldCase.electrodes().size());
+        boolean edgesFine = worst(edgeClaims) <= settings.accuracy();
+        converged =
+            level != null
+                && gaps.resolved()
+                && edgesFine
+                && worst(uncertainty) <= settings.accuracy();
         level = next;
-        progress.report("solve", Double.NaN, report(number, level, uncertainty));
+        edgeRefinement.choose(level, !edgesFine);
+        progress.report(
+            "solve",
+            Double.NaN,
+            report(number, level, Math.max(worst(uncertainty), worst(edgeClaims))));
         double spent = (System.nanoTime() - begin) * 1e-9;
         double ahead = GROWTH * (System.nanoTime() - levelBegin) * 1e-9;
         if (converged || number == LEVELS || (number > 1 && spent + ahead > settings.time_s())) {
@@ -108,7 +135,11 @@ public final class FieldSolver {
             Refinement.targets(level, width, gaps, uncertainty, settings.accuracy(), number == 1);
         SurfaceMesh finer =
             SurfaceMesher.refine(
-                assembly, mesh, meshSettings, request.withTargetSize(target), labelled);
+                assembly,
+                mesh,
+                meshSettings,
+                edgeRefinement.request(request, mesh, target),
+                labelled);
         if (finer.triangleCount() * BYTES_PER_TRIANGLE > settings.memory_bytes()) {
           break;
         }
@@ -119,22 +150,23 @@ public final class FieldSolver {
     if (!gaps.resolved()) {
       warnings.add(gaps.remark(assembly, level.mesh()));
     }
-    if (worst(uncertainty) > settings.accuracy()) {
+    double claim = Math.max(worst(uncertainty), worst(edgeClaims));
+    if (claim > settings.accuracy()) {
       warnings.add(
           String.format(
               Locale.ROOT,
               "the budget ended the refinement: peak fields are uncertain by %.1f %%, asked were"
                   + " %.1f %%; allow more time or memory, or ask for less",
-              100 * worst(uncertainty),
+              100 * claim,
               100 * settings.accuracy()));
     }
     return new FieldResult(
         FieldResult.Method.SOLVE,
         level.mesh(),
         level.nodes(),
-        duties(assembly, features, fieldCase, level, uncertainty, progress),
+        duties(assembly, features, fieldCase, level, uncertainty, edgeClaims, progress),
         level.units().capacitance_F(),
-        worst(uncertainty),
+        claim,
         converged,
         List.copyOf(warnings));
   }
@@ -143,14 +175,14 @@ public final class FieldSolver {
     return Arrays.stream(uncertainty).flatMapToDouble(Arrays::stream).max().orElse(0);
   }
 
-  private static String report(int number, Level level, double[][] uncertainty) {
+  private static String report(int number, Level level, double uncertainty) {
     return String.format(
         Locale.ROOT,
         "level %d done: %,d unknowns, %d iterations, uncertainty %.2f %%",
         number,
         level.surface().unknowns(),
         level.units().iterations(),
-        100 * worst(uncertainty));
+        100 * uncertainty);
   }
 
   /**
@@ -202,8 +234,9 @@ public final class FieldSolver {
       for (int e = 0; e < out[d].length; e++) {
         int p = now.peak(d, e);
         out[d][e] = FLOOR;
-        // A thousandth of the highest field is no peak anyone asks for.
-        if (p >= 0 && smooth[p] > 1e-3 * highest) {
+        // A thousandth of the highest field is no peak anyone asks for, nor is what lies far below
+        // the electrode's own sharp edges.
+        if (p >= 0 && smooth[p] > Math.max(1e-3 * highest, BESIDE_EDGES * edgePeak(now, d, e))) {
           double noise = Math.max(FLOOR, Math.abs(raw[p] / smooth[p] - 1));
           boolean same = Double.isInfinite(change[d][e]);
           if (same) {
@@ -219,12 +252,21 @@ public final class FieldSolver {
     return out;
   }
 
+  /**
+   * Highest field on an electrode's sharp edges at their radius as made, 0 where there are none.
+   */
+  private static double edgePeak(Level level, int duty, int electrode) {
+    int v = level.edgePeak(duty, electrode);
+    return v < 0 ? 0 : level.asMade().get(duty).field_V_per_m()[v];
+  }
+
   private static List<DutyResult> duties(
       Assembly assembly,
       Features features,
       FieldCase fieldCase,
       Level level,
       double[][] uncertainty,
+      double[][] edgeClaims,
       Progress progress) {
     PermittedField permitted = PermittedFields.of(fieldCase.permitted(), fieldCase.surroundings());
     EstimateModel model =
@@ -240,13 +282,15 @@ public final class FieldSolver {
             fieldCase.permitted().amber());
     List<DutyResult> duties = new ArrayList<>();
     for (int d = 0; d < fieldCase.duties().size(); d++) {
-      duties.add(hotSpots.of(d, onNodes(level, d, uncertainty[d], model.field(d, permitted))));
+      duties.add(
+          hotSpots.of(
+              d, onNodes(level, d, uncertainty[d], edgeClaims[d], model.field(d, permitted))));
     }
     return List.copyOf(duties);
   }
 
   private static DutyField onNodes(
-      Level level, int duty, double[] uncertainty, DutyField estimate) {
+      Level level, int duty, double[] uncertainty, double[] edgeClaims, DutyField estimate) {
     int n = level.nodes().count();
     double[] field = new double[n];
     byte[] law = new byte[n];
@@ -257,15 +301,28 @@ public final class FieldSolver {
       if (u < 0) {
         continue;
       }
+      int electrode = level.surface().electrode()[u];
+      double asMade = asMade(level, duty, u);
       if (estimate.law()[i] == code(Law.EDGE_AS_MADE)
           || estimate.law()[i] == code(Law.CORNER_AS_MADE)) {
-        field[i] = estimate.field_V_per_m()[i];
         law[i] = estimate.law()[i];
-        relative[i] = estimate.uncertainty()[i];
+        field[i] = Double.isNaN(asMade) ? estimate.field_V_per_m()[i] : asMade;
+        relative[i] =
+            Double.isNaN(asMade)
+                ? estimate.uncertainty()[i]
+                : Math.max(
+                    edgeClaims[electrode],
+                    level.asMade().get(duty).uncertainty()[level.nodes().nodeVertex()[i]]);
       } else {
         field[i] = level.recovered().get(duty)[u];
-        relative[i] =
-            level.edgeZone()[u] ? IN_EDGE_ZONE : uncertainty[level.surface().electrode()[u]];
+        relative[i] = uncertainty[electrode];
+        int edge = level.zoneEdge()[u];
+        if (edge >= 0) {
+          // The face beside an edge never has a higher field than the edge at its radius as made.
+          double most = asMade(level, duty, edge);
+          field[i] = Double.isNaN(most) ? field[i] : Math.min(field[i], most);
+          relative[i] = IN_EDGE_ZONE;
+        }
       }
     }
     return new DutyField(
@@ -276,6 +333,12 @@ public final class FieldSolver {
         estimate.radius_m(),
         law,
         relative);
+  }
+
+  /** Peak field at the radius as made at an unknown on a sharp edge, NaN where there is none. */
+  private static double asMade(Level level, int duty, int unknown) {
+    int v = level.nodes().nodeVertex()[level.surface().unknownNode()[unknown]];
+    return level.asMade().isEmpty() ? Double.NaN : level.asMade().get(duty).field_V_per_m()[v];
   }
 
   /** The form in which {@link DutyField#law} keeps a law. */

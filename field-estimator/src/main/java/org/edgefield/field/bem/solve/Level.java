@@ -5,6 +5,9 @@ import java.util.List;
 import org.edgefield.curvature.Features;
 import org.edgefield.curvature.SurfaceNodes;
 import org.edgefield.curvature.node.NodeBuilder;
+import org.edgefield.field.bem.edge.AsMadeField;
+import org.edgefield.field.bem.edge.SharpEdges;
+import org.edgefield.field.bem.evaluate.FieldEvaluator;
 import org.edgefield.field.bem.recovery.FieldRecovery;
 import org.edgefield.field.job.Duty;
 import org.edgefield.field.job.FieldCase;
@@ -20,22 +23,28 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  * @param nodes its smooth-patch nodes
  * @param surface charged part of it
  * @param units solved densities
- * @param edgeZone per unknown, whether it lies on a sharp edge or too near to one to have a peak
+ * @param zoneEdge per unknown on a sharp edge or too near to one to have a peak, the nearest
+ *     unknown on that edge; -1 elsewhere
  * @param raw per duty, magnitude over the cycle at every unknown, V/m
  * @param recovered the same, smoothed
+ * @param sharp field around edges drawn sharp, null where there are none
+ * @param asMade per duty, peak fields on those edges at their radius as made; empty where none
  */
 record Level(
     SurfaceMesh mesh,
     SurfaceNodes nodes,
     ChargedSurface surface,
     UnitFields units,
-    boolean[] edgeZone,
+    int[] zoneEdge,
     List<double[]> raw,
-    List<double[]> recovered) {
+    List<double[]> recovered,
+    AsMadeField sharp,
+    List<AsMadeField.Values> asMade) {
 
   static Level solve(
       Assembly assembly,
       Features features,
+      SharpEdges sharpEdges,
       SurfaceMesh mesh,
       FieldCase fieldCase,
       double farTolerance,
@@ -59,24 +68,110 @@ record Level(
     }
     List<double[]> raw = new ArrayList<>();
     List<double[]> recovered = new ArrayList<>();
+    AsMadeField sharp =
+        sharpEdges.count() == 0
+            ? null
+            : sharpField(
+                assembly,
+                features,
+                sharpEdges,
+                mesh,
+                nodes,
+                surface,
+                units,
+                fieldCase,
+                farTolerance,
+                workers);
+    List<AsMadeField.Values> asMade = new ArrayList<>();
     for (Duty duty : fieldCase.duties()) {
       Superposition weights = Superposition.of(fieldCase, duty, units.charge_C());
       raw.add(magnitude(weights, units.density()));
       recovered.add(magnitude(weights, smooth));
+      if (sharp != null) {
+        asMade.add(
+            sharp.of(
+                (perSet, i) -> Math.hypot(weights.real(perSet, i), weights.imaginary(perSet, i)),
+                fieldCase.edges()::radius_m));
+      }
     }
     int[] partOfUnknown = new int[surface.unknowns()];
     for (int c = 0; c < surface.cornerUnknown().length; c++) {
       partOfUnknown[surface.cornerUnknown()[c]] =
           assembly.geometry().facePart(mesh.triangleFace()[surface.meshTriangle()[c / 3]]);
     }
-    boolean[] zone =
+    int[] zone =
         EdgeZone.of(
             assembly,
             surface,
             partOfUnknown,
             fieldCase.edges(),
             fieldCase.surroundings().earthPlane());
-    return new Level(mesh, nodes, surface, units, zone, raw, recovered);
+    return new Level(mesh, nodes, surface, units, zone, raw, recovered, sharp, asMade);
+  }
+
+  private static AsMadeField sharpField(
+      Assembly assembly,
+      Features features,
+      SharpEdges sharpEdges,
+      SurfaceMesh mesh,
+      SurfaceNodes nodes,
+      ChargedSurface surface,
+      UnitFields units,
+      FieldCase fieldCase,
+      double farTolerance,
+      Workers workers) {
+    boolean[] charged = new boolean[mesh.triangleCount()];
+    for (int t : surface.meshTriangle()) {
+      charged[t] = true;
+    }
+    int[] electrodeOfPart = fieldCase.electrodeOfPart(assembly.parts().size());
+    double[][] ambient = new double[units.density().length][3];
+    int electrodes = fieldCase.electrodes().size();
+    if (ambient.length > electrodes) {
+      ambient[electrodes] = fieldCase.surroundings().ambientField_V_per_m();
+    }
+    FieldEvaluator evaluator =
+        new FieldEvaluator(
+            surface.triangles(),
+            surface.cornerUnknown(),
+            units.density(),
+            UnitFields.mirror(fieldCase.surroundings()),
+            ambient,
+            farTolerance,
+            workers);
+    return AsMadeField.of(
+        assembly.geometry(),
+        features,
+        sharpEdges,
+        mesh,
+        nodes,
+        charged,
+        evaluator,
+        (t, set) ->
+            electrodeOfPart[assembly.geometry().facePart(mesh.triangleFace()[t])] == set ? 1 : 0,
+        ambient.length);
+  }
+
+  /**
+   * Vertex with the highest field of a duty on an electrode's sharp edges.
+   *
+   * @return mesh vertex, -1 where the electrode has none
+   */
+  int edgePeak(int duty, int electrode) {
+    int best = -1;
+    if (asMade.isEmpty()) {
+      return best;
+    }
+    double[] value = asMade.get(duty).field_V_per_m();
+    for (int i = 0; i < surface.unknowns(); i++) {
+      int v = nodes.nodeVertex()[surface.unknownNode()[i]];
+      if (surface.electrode()[i] == electrode
+          && !Double.isNaN(value[v])
+          && (best < 0 || value[v] > value[best])) {
+        best = v;
+      }
+    }
+    return best;
   }
 
   // Only the normal component exists on a conductor, so the peak over the cycle is the modulus.
@@ -99,7 +194,7 @@ record Level(
     double[] value = recovered.get(duty);
     for (int i = 0; i < value.length; i++) {
       if (surface.electrode()[i] == electrode
-          && !edgeZone[i]
+          && zoneEdge[i] < 0
           && (best < 0 || value[i] > value[best])) {
         best = i;
       }

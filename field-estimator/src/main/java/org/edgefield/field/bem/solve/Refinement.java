@@ -55,7 +55,7 @@ final class Refinement {
                 ? FIRST_CUT
                 : Math.max(0.5, Math.min(0.7, 0.85 * Math.sqrt(accuracy / uncertainty[d][e])));
         for (int i = 0; i < raw.length; i++) {
-          if (surface.electrode()[i] != e || level.edgeZone()[i]) {
+          if (surface.electrode()[i] != e || level.zoneEdge()[i] >= 0) {
             continue;
           }
           int v = level.nodes().nodeVertex()[surface.unknownNode()[i]];

@@ -32,10 +32,7 @@ record UnitFields(double[][] density, double[][] charge_C, int iterations, doubl
       Workers workers,
       Progress progress) {
     Surroundings around = fieldCase.surroundings();
-    Mirror mirror =
-        around.earthPlane() == null
-            ? null
-            : new Mirror(around.earthPlane().axis(), around.earthPlane().offset_m());
+    Mirror mirror = mirror(around);
     Collocation rows =
         Collocation.of(
             surface.triangles(), surface.cornerUnknown(), surface.position(), surface.seam());
@@ -71,6 +68,13 @@ record UnitFields(double[][] density, double[][] charge_C, int iterations, doubl
       }
     }
     return new UnitFields(out.solution(), charge, out.iterations(), out.residual());
+  }
+
+  /** The earth plane as a mirror, null where there is none. */
+  static Mirror mirror(Surroundings around) {
+    return around.earthPlane() == null
+        ? null
+        : new Mirror(around.earthPlane().axis(), around.earthPlane().offset_m());
   }
 
   private static double[] charges(ChargedSurface surface, double[] s, int electrodes) {

@@ -130,7 +130,7 @@ record ValidationRun(int nodes, double time_s, double computed, double claimed, 
         new Permitted(Permitted.Criterion.FIXED, 3e6, 1, 0.8, 1));
   }
 
-  private static boolean matches(String pattern, String name) {
+  static boolean matches(String pattern, String name) {
     return pattern.endsWith("*")
         ? name.startsWith(pattern.substring(0, pattern.length() - 1))
         : name.equals(pattern);
@@ -187,7 +187,7 @@ record ValidationRun(int nodes, double time_s, double computed, double claimed, 
     throw new IllegalArgumentException(electrode);
   }
 
-  private static Path models() {
+  static Path models() {
     Path folder = Path.of("").toAbsolutePath();
     while (!Files.isDirectory(folder.resolve("test-models/step"))) {
       folder = folder.getParent();
