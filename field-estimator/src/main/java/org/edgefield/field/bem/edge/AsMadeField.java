@@ -18,7 +18,7 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  * Peak fields on edges and corners that are drawn sharp and made with a radius r:
  *
  * <pre>
- * edge:   E = C(beta) K r^(-s) (1 + 0.7 (r/t)^(2 pi/beta))
+ * edge:   E = C(beta) K r^(-s) (1 + 0.6 (r/t)^(2 pi/beta))
  * right-angled corner:  E = 1.470 kappa r^(-0.5458) (1 + 0.6 (r/t)^1.45)
  * other corners:        E = 1.7 kappa r^(lambda - 1)
  * </pre>
@@ -26,13 +26,13 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  * with K and kappa from the solved potential and t the distance to the next edge across a face. The
  * terms in r/t make up for bodies that are not large against r (fitted on directly rounded bodies,
  * from the safe side); above r/t = 0.1 the rounding must be modelled. The coefficient for other
- * corners lies 16 % above the right-angled corner's and 46 % above an edge's.
+ * corners lies 16 % above the right-angled corner's and 46 % above an edge's, on the safe side.
  */
 public final class AsMadeField {
   /** Radius over thickness above which the rounding must be modelled. */
   public static final double LARGEST_SHARE = 0.1;
 
-  private static final double EDGE_BIAS = 0.7;
+  private static final double EDGE_BIAS = 0.6;
   private static final double CORNER_BIAS = 0.6;
   private static final double CORNER_BIAS_POWER = 1.45;
   private static final double OTHER_CORNER = 1.7;
@@ -58,7 +58,7 @@ public final class AsMadeField {
    * Values of one duty.
    *
    * @param field_V_per_m per mesh vertex, NaN where none
-   * @param uncertainty relative, per mesh vertex
+   * @param uncertainty relative, per mesh vertex, of the coefficients; that of the laws not counted
    */
   public record Values(double[] field_V_per_m, double[] uncertainty) {}
 
@@ -256,7 +256,7 @@ public final class AsMadeField {
         double lambda = Math.max(LEAST_LAMBDA, Math.min(1, Math.log(ratio) / Math.log(2)));
         double distance = 0.5 * corners.reach_m()[i];
         field[v] = OTHER_CORNER * near / distance * Math.pow(radius / distance, lambda - 1);
-        uncertainty[v] = 1 - RoundedCorner.COEFFICIENT / OTHER_CORNER;
+        uncertainty[v] = 0;
       }
     }
   }

@@ -16,7 +16,8 @@ import org.edgefield.field.bem.evaluate.FieldEvaluator;
  * <pre>K(rho) = (pi/beta) (2/n) Sum_{j=1}^{n-1} (V - phi_j) sin(pi j/n) rho^(-pi/beta),
  * theta_j = j beta / n,  n = 4</pre>
  *
- * at the reach and at half of it, and extrapolated linearly to the edge. Limit: the mesh must hold
+ * at the reach and at half of it, and extrapolated linearly to the edge where the faces are curved;
+ * between plane faces the higher terms are orthogonal to the projection. Limit: the mesh must hold
  * rows of elements finer than the arcs, see {@link SharpEdges#gradings}.
  *
  * @param k per set, K per station, V/m times m^s
@@ -68,7 +69,8 @@ record EdgeCoefficients(double[][] k, double[][] correction) {
         double rho = stations.reach_m()[i];
         double near = project(phi, POINTS * i, v, power, 0.5 * rho);
         double far = project(phi, POINTS * i + ARC - 1, v, power, rho);
-        k[set][i] = 2 * near - far;
+        // Between plane faces the projection is exact and nothing is left to extrapolate.
+        k[set][i] = stations.plain()[i] ? far : 2 * near - far;
         correction[set][i] = near - far;
       }
     }

@@ -15,6 +15,7 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  * @param triangle a mesh triangle beside each
  * @param number which of the sharp edges
  * @param interiorAngle_rad angle of the solid
+ * @param plain whether both faces are plane
  * @param reach_m how far the wedge's field holds
  * @param frame position, unit direction into face 1 across the edge, outward normal of face 1: 9
  *     each
@@ -24,6 +25,7 @@ record EdgeStations(
     int[] triangle,
     int[] number,
     double[] interiorAngle_rad,
+    boolean[] plain,
     double[] reach_m,
     double[] frame) {
 
@@ -53,6 +55,7 @@ record EdgeStations(
             new int[n],
             new int[n],
             new double[n],
+            new boolean[n],
             new double[n],
             new double[9 * n]);
     for (int i = 0; i < n; i++) {
@@ -107,6 +110,7 @@ record EdgeStations(
       geometry.edgeUv(edge, 1, 1, t, uv);
       geometry.curvature(1, new int[] {faces[1]}, uv, second);
       number[i] = edges.number(edge);
+      plain[i] = edges.plain(number[i]);
       interiorAngle_rad[i] = edges.feature(number[i]).interiorAngle_rad(t[0]);
       reach_m[i] = edges.reach_m(number[i], curve[0], curve[1], curve[2]);
       // Across the edge within face 1; at a convex edge it leads behind face 2.

@@ -36,6 +36,9 @@ public final class SharpEdges {
   /** Cosine of the turn below which one edge carries on as another. */
   private static final double CARRIES_ON = 0.94;
 
+  /** Radius of the adjoining faces over the part's size from which they count as plane. */
+  private static final double PLAIN = 1e3;
+
   /** Rows of elements within the reach. */
   private static final double FIRST_ROW = 0.125;
 
@@ -54,6 +57,7 @@ public final class SharpEdges {
   private final double[] reach;
   private final double[] thickness;
   private final double[][] ends;
+  private final boolean[] plain;
   private final double finer;
 
   private SharpEdges(
@@ -63,6 +67,7 @@ public final class SharpEdges {
       double[] reach,
       double[] thickness,
       double[][] ends,
+      boolean[] plain,
       double finer) {
     this.geometry = geometry;
     this.features = features;
@@ -70,6 +75,7 @@ public final class SharpEdges {
     this.reach = reach;
     this.thickness = thickness;
     this.ends = ends;
+    this.plain = plain;
     this.finer = finer;
     for (int i = 0; i < edge.length; i++) {
       numberOfEdge.put(edge[i], i);
@@ -100,7 +106,15 @@ public final class SharpEdges {
     int[] edge = found.stream().mapToInt(Integer::intValue).toArray();
     int n = edge.length;
     SharpEdges out =
-        new SharpEdges(geometry, features, edge, new double[n], new double[n], new double[n][], 1);
+        new SharpEdges(
+            geometry,
+            features,
+            edge,
+            new double[n],
+            new double[n],
+            new double[n][],
+            new boolean[n],
+            1);
     if (out.edge.length > 0) {
       out.measure(assembly, mesh, electrodeOfPart);
     }
@@ -114,7 +128,7 @@ public final class SharpEdges {
    */
   public SharpEdges nearer(double share) {
     double[] less = Arrays.stream(reach).map(r -> share * r).toArray();
-    return new SharpEdges(geometry, features, edge, less, thickness, ends, share * finer);
+    return new SharpEdges(geometry, features, edge, less, thickness, ends, plain, share * finer);
   }
 
   private void measure(Assembly assembly, SurfaceMesh mesh, int[] electrodeOfPart) {
@@ -156,7 +170,9 @@ public final class SharpEdges {
           clear = bodies.distance();
         }
       }
-      double r = Math.min(Math.min(thickness[i], clear), smallestRadius(i));
+      double radius = smallestRadius(i);
+      plain[i] = radius > PLAIN * part.size_m();
+      double r = Math.min(Math.min(thickness[i], clear), radius);
       r = Math.min(SHARE * r, Double.isInfinite(longest) ? r : SHARE_TO_END * longest);
       reach[i] = Math.max(r, LEAST * part.size_m());
     }
@@ -322,6 +338,11 @@ public final class SharpEdges {
   /** Reach at a point of an edge, metres. */
   double reach_m(int i, double x, double y, double z) {
     return Math.min(reach[i], SHARE_TO_END * toEnd(i, x, y, z));
+  }
+
+  /** Whether an edge is straight between plane faces, as far as its adjoining faces tell. */
+  boolean plain(int i) {
+    return plain[i];
   }
 
   EdgeFeature feature(int i) {

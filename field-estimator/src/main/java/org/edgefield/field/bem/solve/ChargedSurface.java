@@ -22,6 +22,8 @@ import org.edgefield.importer.mesh.SurfaceMesh;
  * @param nodeUnknown unknown per node, -1 where it carries no charge
  * @param position position per unknown, 3 each
  * @param seam whether an unknown lies on the border of its patch
+ * @param border sides that belong to one triangle alone, 2 unknowns each: a sharp edge, an open
+ *     edge or a crack
  * @param electrode electrode per unknown
  */
 record ChargedSurface(
@@ -32,6 +34,7 @@ record ChargedSurface(
     int[] nodeUnknown,
     double[] position,
     boolean[] seam,
+    int[] border,
     int[] electrode) {
 
   static ChargedSurface of(
@@ -72,6 +75,11 @@ record ChargedSurface(
     for (int u = 0; u < unknowns; u++) {
       System.arraycopy(mesh.xyz(), 3 * nodes.nodeVertex()[unknownNode[u]], position, 3 * u, 3);
     }
+    int[] border = borders(corner);
+    boolean[] seam = new boolean[unknowns];
+    for (int u : border) {
+      seam[u] = true;
+    }
     return new ChargedSurface(
         new CurvedTriangles(SideMidPoints.geometry(assembly.geometry(), mesh, chosen)),
         chosen,
@@ -79,7 +87,8 @@ record ChargedSurface(
         Arrays.copyOf(unknownNode, unknowns),
         nodeUnknown,
         position,
-        borders(corner, unknowns),
+        seam,
+        border,
         Arrays.copyOf(electrode, unknowns));
   }
 
@@ -93,20 +102,20 @@ record ChargedSurface(
     return true;
   }
 
-  // A side that belongs to one triangle alone is a border: a sharp edge, an open edge or a crack.
-  private static boolean[] borders(int[] corner, int unknowns) {
+  private static int[] borders(int[] corner) {
     Map<Long, Integer> count = new HashMap<>(corner.length);
     for (int c = 0; c < corner.length; c++) {
       count.merge(key(corner, c), 1, Integer::sum);
     }
-    boolean[] border = new boolean[unknowns];
+    int[] border = new int[2 * corner.length];
+    int n = 0;
     for (int c = 0; c < corner.length; c++) {
       if (count.get(key(corner, c)) == 1) {
-        border[corner[c]] = true;
-        border[corner[3 * (c / 3) + (c + 1) % 3]] = true;
+        border[n++] = corner[c];
+        border[n++] = corner[3 * (c / 3) + (c + 1) % 3];
       }
     }
-    return border;
+    return Arrays.copyOf(border, n);
   }
 
   private static long key(int[] corner, int c) {

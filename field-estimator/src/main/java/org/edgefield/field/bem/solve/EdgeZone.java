@@ -1,6 +1,5 @@
 package org.edgefield.field.bem.solve;
 
-import java.util.Arrays;
 import org.edgefield.field.job.EdgesAsMade;
 import org.edgefield.field.job.Surroundings.EarthPlane;
 import org.edgefield.importer.brep.Assembly;
@@ -33,13 +32,20 @@ final class EdgeZone {
     int n = surface.unknowns();
     int[] zone = new int[n];
     double[] x = surface.position();
-    // Points are kept as triangles without extent.
-    int[] corners = new int[3 * n];
-    int[] group = new int[n];
+    int[] border = surface.border();
+    // Sides are kept as triangles without width.
+    int[] corners = new int[3 * border.length / 2];
+    int[] group = new int[border.length / 2];
+    for (int g = 0; g < group.length; g++) {
+      int a = border[2 * g];
+      int b = border[2 * g + 1];
+      corners[3 * g] = a;
+      corners[3 * g + 1] = b;
+      corners[3 * g + 2] = b;
+      group[g] = inPlane(x, a, plane) && inPlane(x, b, plane) ? -1 : partOfUnknown[a];
+    }
     for (int i = 0; i < n; i++) {
-      Arrays.fill(corners, 3 * i, 3 * i + 3, i);
       zone[i] = surface.seam()[i] ? i : -1;
-      group[i] = surface.seam()[i] && !inPlane(x, i, plane) ? partOfUnknown[i] : -1;
     }
     TriangleTree tree = TriangleTree.build(x, corners, group);
     TriangleCursor cursor = tree.cursor();
@@ -56,7 +62,8 @@ final class EdgeZone {
       double width =
           Math.max(RADII * edges.radius_m(part), SHARE * least(assembly.parts().get(part)));
       if (cursor.nearest(x[3 * i], x[3 * i + 1], x[3 * i + 2], width)) {
-        zone[i] = cursor.triangle();
+        int g = cursor.triangle();
+        zone[i] = border[2 * g + (cursor.weight(0) > 0.5 ? 0 : 1)];
       }
     }
     return zone;
