@@ -80,7 +80,7 @@ static void spherePairs(StepFolder& out) {
             {piece(sphere(100), "Large sphere"), piece(sphere(25, 0, 0, 5000), "Small sphere")});
   out.write("overlapping-spheres.step", "two spheres that cut each other at right angles", "R40 and R30 distance 50",
             {piece(sphere(40), "Sphere A"), piece(sphere(30, 0, 0, 50), "Sphere B")});
-  // Diameters and gaps of the sphere-gap standard, up to half the diameter.
+  // From the sphere-gap standard; writeSphereGaps has the others.
   for (auto& g : std::vector<std::pair<double, double>>{{20, 1}, {20, 2}, {20, 5}, {50, 5}, {50, 10}, {50, 25}, {100, 10}, {100, 20}, {100, 50},
                                                         {250, 20}, {250, 50}, {250, 125}, {500, 50}, {500, 100}, {500, 250}, {1000, 100}, {1000, 200}, {1000, 500}})
     spherePair(out, "sphere-gap-d" + text(g.first) + "-s" + text(g.second) + ".step", g.first / 2, g.first / 2, g.second);
@@ -105,4 +105,17 @@ void writeExactBodies(StepFolder& out) {
   spheroids(out);
   spherePairs(out);
   bodiesOverEarth(out);
+}
+
+void writeSphereGaps(StepFolder& out) {
+  const std::vector<std::pair<double, std::vector<double>>> gaps{{20, {0.5}},
+                                                                 {50, {15, 20}},
+                                                                 {100, {5, 30, 40}},
+                                                                 {150, {10, 20, 30, 40, 50, 60, 75}},
+                                                                 {250, {10, 30, 75, 100}},
+                                                                 {500, {20, 150, 200}},
+                                                                 {1000, {50, 300, 400}}};
+  for (auto& [diameter, all] : gaps)
+    for (double gap : all)
+      spherePair(out, "sphere-gap-d" + text(diameter) + "-s" + text(gap) + ".step", diameter / 2, diameter / 2, gap);
 }

@@ -23,5 +23,6 @@ int main(int argc, char** argv) {
   writeExactBodies(out);
   writeEdges(out);
   writeFileVariety(out);
+  writeSphereGaps(out);
   return manifest.good() ? 0 : 1;
 }

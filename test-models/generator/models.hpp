@@ -11,3 +11,5 @@ void writeExactBodies(StepFolder& out);
 void writeEdges(StepFolder& out);
 // What real files bring: touching and overlapping parts, thin walls, units, names, instances, NURBS.
 void writeFileVariety(StepFolder& out);
+// The sphere gaps of the standard's table that are not among the exact bodies.
+void writeSphereGaps(StepFolder& out);

@@ -5,6 +5,8 @@ import java.util.List;
 import java.util.stream.IntStream;
 import org.edgefield.curvature.Features;
 import org.edgefield.curvature.SurfaceNodes;
+import org.edgefield.field.edge.RoundedCorner;
+import org.edgefield.field.gas.FieldProfile;
 import org.edgefield.field.gas.PermittedField;
 import org.edgefield.field.hotspot.LocalLaw;
 import org.edgefield.field.job.Duty;
@@ -465,6 +467,17 @@ public final class EstimateModel implements LocalLaw {
     int s = sites.siteOfNode[node];
     Value v = evaluate(s, fieldCase.duties().get(duty));
     return law(s, v.against, radius_m, gap_m) / law(s, v.against, Double.NaN, Double.NaN);
+  }
+
+  @Override
+  public FieldProfile asMade(int node) {
+    int s = sites.siteOfNode[node];
+    double radius = sites.radius(s);
+    return switch (sites.law[s]) {
+      case EDGE_AS_MADE -> x -> sites.wedge[s].decay(x / radius);
+      case CORNER_AS_MADE -> x -> 1 / RoundedCorner.spread(x / radius);
+      default -> null;
+    };
   }
 
   private double law(int s, int against, double radius_m, double gap_m) {

@@ -2,7 +2,9 @@ package org.edgefield.field.hotspot;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import org.edgefield.curvature.EdgeClass;
 import org.edgefield.curvature.Features;
 import org.edgefield.curvature.SurfaceNodes;
@@ -70,6 +72,17 @@ public final class HotSpots {
    * @param field its values on the nodes
    */
   public DutyResult of(int duty, DutyField field) {
+    return of(duty, field, Map.of());
+  }
+
+  /**
+   * The outcome of one duty where more is known of what some places bear.
+   *
+   * @param duty index in the case
+   * @param field its values on the nodes
+   * @param permittedAt permitted field by peak node, V/m; others keep that of the field
+   */
+  public DutyResult of(int duty, DutyField field, Map<Integer, Double> permittedAt) {
     double[] utilisation = new double[nodes.count()];
     int peak = 0;
     for (int n = 0; n < utilisation.length; n++) {
@@ -80,8 +93,9 @@ public final class HotSpots {
     }
     List<HotSpot> spots = new ArrayList<>();
     for (int[] region : regions.above(utilisation, amber)) {
-      spots.add(describe(duty, spots.size() + 1, region, field, utilisation));
+      spots.add(describe(duty, region, field, utilisation, permittedAt));
     }
+    spots = ranked(spots);
     HotSpot highest;
     if (!spots.isEmpty()) {
       highest = spots.get(0);
@@ -89,12 +103,26 @@ public final class HotSpots {
       double limit = Math.max(CALM_SHARE * utilisation[peak], Double.MIN_NORMAL);
       List<int[]> calm = regions.above(utilisation, limit);
       int[] region = calm.isEmpty() ? new int[] {peak} : calm.get(0);
-      highest = describe(duty, 1, region, field, utilisation);
+      highest = describe(duty, region, field, utilisation, permittedAt);
     }
     return new DutyResult(field, highest, List.copyOf(spots));
   }
 
-  private HotSpot describe(int duty, int id, int[] region, DutyField field, double[] utilisation) {
+  /** By utilisation, numbered from 1. */
+  private static List<HotSpot> ranked(List<HotSpot> spots) {
+    List<HotSpot> out = new ArrayList<>();
+    spots.stream()
+        .sorted(Comparator.comparingDouble(h -> -h.utilisation()))
+        .forEach(h -> out.add(h.withId(out.size() + 1)));
+    return out;
+  }
+
+  private HotSpot describe(
+      int duty,
+      int[] region,
+      DutyField field,
+      double[] utilisation,
+      Map<Integer, Double> permittedAt) {
     int p = region[0];
     for (int n : region) {
       if (utilisation[n] > utilisation[p]) {
@@ -108,14 +136,16 @@ public final class HotSpots {
       areaSum += nodeArea[n];
     }
     double gap = model.gap_m(duty, p);
+    double limit = permittedAt.getOrDefault(p, field.permitted_V_per_m()[p]);
+    double used = field.field_V_per_m()[p] / limit;
     return new HotSpot(
-        id,
+        1,
         nodePart[p],
         regions.name(p),
         Arrays.copyOfRange(mesh.xyz(), 3 * v, 3 * v + 3),
         field.field_V_per_m()[p],
-        field.permitted_V_per_m()[p],
-        utilisation[p],
+        limit,
+        used,
         field.uncertainty()[p],
         line ? Double.NaN : areaSum,
         line ? length(region) : Double.NaN,
@@ -124,7 +154,7 @@ public final class HotSpots {
         model.opposingPart(duty, p),
         lawOf(field.law()[p]),
         region,
-        new Cures(model, permitted).of(duty, p, utilisation[p], field.radius_m()[p]));
+        new Cures(model, permitted).of(duty, p, used, field.radius_m()[p]));
   }
 
   @SuppressWarnings("EnumOrdinal")

@@ -1,5 +1,7 @@
 package org.edgefield.field.hotspot;
 
+import org.edgefield.field.gas.FieldProfile;
+
 /**
  * What is known of the field around a node beyond its value: what it stands against, and how it
  * would change with radius and gap. Comes from the estimate; a solve uses it for its cures, scaled
@@ -39,4 +41,12 @@ public interface LocalLaw {
    * @param gap_m gap, NaN to keep it
    */
   double change(int duty, int node, double radius_m, double gap_m);
+
+  /**
+   * Fall of the field near a node on an edge or corner drawn sharp, as a share of the peak on its
+   * rounding.
+   *
+   * @return share by distance, null where the node lies on no such edge
+   */
+  FieldProfile asMade(int node);
 }

@@ -47,4 +47,25 @@ public record HotSpot(
    * @param gap_m gap that the same radius would need, NaN where no gap does
    */
   public record Cure(double radius_m, double voltage_V, double voltageFactor, double gap_m) {}
+
+  /** The same with another rank. */
+  public HotSpot withId(int rank) {
+    return new HotSpot(
+        rank,
+        part,
+        feature,
+        at_m,
+        field_V_per_m,
+        permitted_V_per_m,
+        utilisation,
+        uncertainty,
+        area_m2,
+        length_m,
+        radius_m,
+        gap_m,
+        opposing,
+        law,
+        nodes,
+        cure);
+  }
 }

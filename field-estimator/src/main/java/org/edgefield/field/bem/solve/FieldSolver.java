@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Locale;
 import org.edgefield.curvature.Features;
 import org.edgefield.field.bem.edge.SharpEdges;
+import org.edgefield.field.bem.evaluate.FieldEvaluator;
 import org.edgefield.field.estimate.EstimateModel;
 import org.edgefield.field.gas.PermittedField;
 import org.edgefield.field.gas.PermittedFields;
@@ -160,11 +161,25 @@ public final class FieldSolver {
               100 * claim,
               100 * settings.accuracy()));
     }
+    List<DutyResult> duties;
+    try (Workers workers = new Workers(settings.threads())) {
+      duties =
+          duties(
+              assembly,
+              features,
+              fieldCase,
+              level,
+              uncertainty,
+              edgeClaims,
+              level.evaluator(fieldCase, farTolerance, workers),
+              warnings,
+              progress);
+    }
     return new FieldResult(
         FieldResult.Method.SOLVE,
         level.mesh(),
         level.nodes(),
-        duties(assembly, features, fieldCase, level, uncertainty, edgeClaims, progress),
+        duties,
         level.units().capacitance_F(),
         claim,
         converged,
@@ -267,6 +282,8 @@ public final class FieldSolver {
       Level level,
       double[][] uncertainty,
       double[][] edgeClaims,
+      FieldEvaluator evaluator,
+      List<String> warnings,
       Progress progress) {
     PermittedField permitted = PermittedFields.of(fieldCase.permitted(), fieldCase.surroundings());
     EstimateModel model =
@@ -280,11 +297,16 @@ public final class FieldSolver {
             model,
             permitted,
             fieldCase.permitted().amber());
+    Inceptions inceptions =
+        Inceptions.wanted(fieldCase) ? new Inceptions(level, evaluator, fieldCase, model) : null;
     List<DutyResult> duties = new ArrayList<>();
     for (int d = 0; d < fieldCase.duties().size(); d++) {
-      duties.add(
-          hotSpots.of(
-              d, onNodes(level, d, uncertainty[d], edgeClaims[d], model.field(d, permitted))));
+      DutyField field = onNodes(level, d, uncertainty[d], edgeClaims[d], model.field(d, permitted));
+      DutyResult result = hotSpots.of(d, field);
+      duties.add(inceptions == null ? result : hotSpots.of(d, field, inceptions.of(d, result)));
+    }
+    if (inceptions != null) {
+      warnings.addAll(inceptions.remarks());
     }
     return List.copyOf(duties);
   }

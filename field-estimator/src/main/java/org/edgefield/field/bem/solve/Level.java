@@ -125,20 +125,7 @@ record Level(
       charged[t] = true;
     }
     int[] electrodeOfPart = fieldCase.electrodeOfPart(assembly.parts().size());
-    double[][] ambient = new double[units.density().length][3];
-    int electrodes = fieldCase.electrodes().size();
-    if (ambient.length > electrodes) {
-      ambient[electrodes] = fieldCase.surroundings().ambientField_V_per_m();
-    }
-    FieldEvaluator evaluator =
-        new FieldEvaluator(
-            surface.triangles(),
-            surface.cornerUnknown(),
-            units.density(),
-            UnitFields.mirror(fieldCase.surroundings()),
-            ambient,
-            farTolerance,
-            workers);
+    FieldEvaluator evaluator = evaluator(surface, units, fieldCase, farTolerance, workers);
     return AsMadeField.of(
         assembly.geometry(),
         features,
@@ -149,7 +136,37 @@ record Level(
         evaluator,
         (t, set) ->
             electrodeOfPart[assembly.geometry().facePart(mesh.triangleFace()[t])] == set ? 1 : 0,
-        ambient.length);
+        units.density().length);
+  }
+
+  private static FieldEvaluator evaluator(
+      ChargedSurface surface,
+      UnitFields units,
+      FieldCase fieldCase,
+      double farTolerance,
+      Workers workers) {
+    double[][] ambient = new double[units.density().length][3];
+    int electrodes = fieldCase.electrodes().size();
+    if (ambient.length > electrodes) {
+      ambient[electrodes] = fieldCase.surroundings().ambientField_V_per_m();
+    }
+    return new FieldEvaluator(
+        surface.triangles(),
+        surface.cornerUnknown(),
+        units.density(),
+        UnitFields.mirror(fieldCase.surroundings()),
+        ambient,
+        farTolerance,
+        workers);
+  }
+
+  /**
+   * Potential and field of every solved set off the surface.
+   *
+   * @param workers threads; must stay open while the evaluator is used
+   */
+  FieldEvaluator evaluator(FieldCase fieldCase, double farTolerance, Workers workers) {
+    return evaluator(surface, units, fieldCase, farTolerance, workers);
   }
 
   /**

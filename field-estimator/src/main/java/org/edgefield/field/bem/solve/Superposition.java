@@ -65,6 +65,16 @@ final class Superposition {
     }
   }
 
+  /** In-phase weight of a set. */
+  double real(int set) {
+    return real[set];
+  }
+
+  /** Quadrature weight of a set. */
+  double imaginary(int set) {
+    return imaginary[set];
+  }
+
   /** In-phase sum of the sets at one unknown. */
   double real(double[][] density, int i) {
     return sum(real, density, i);

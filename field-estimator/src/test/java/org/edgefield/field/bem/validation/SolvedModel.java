@@ -23,15 +23,28 @@ import org.edgefield.importer.step.ReadLimits;
 import org.edgefield.importer.step.StepReader;
 
 /**
- * A committed STEP model, one part of it at 1 V and all others earthed, solved.
+ * A committed STEP model, one part of it at a voltage (1 V where none is given) and all others
+ * earthed, solved.
  *
  * @param result outcome
  * @param time_s wall time from reading the file on
  */
 record SolvedModel(FieldResult result, double time_s) {
+  static final Permitted FIXED = new Permitted(Permitted.Criterion.FIXED, 3e6, 1, 0.8, 1);
 
   static SolvedModel of(
       String model, String live, double edgeRadius_m, MeshSettings mesh, SolveSettings settings) {
+    return of(model, live, edgeRadius_m, mesh, settings, FIXED, 1);
+  }
+
+  static SolvedModel of(
+      String model,
+      String live,
+      double edgeRadius_m,
+      MeshSettings mesh,
+      SolveSettings settings,
+      Permitted permitted,
+      double volts_V) {
     long begin = System.nanoTime();
     Path path = ValidationRun.models().resolve(model);
     try (KernelAssembly assembly = StepReader.read(path, ReadLimits.defaults(), Progress.NONE)) {
@@ -42,15 +55,15 @@ record SolvedModel(FieldResult result, double time_s) {
       Electrode other = new Electrode("earth", off, Electrode.Kind.EARTH);
       List<Electrode> electrodes = off.length == 0 ? List.of(one) : List.of(one, other);
       double[] volts = new double[electrodes.size()];
-      volts[0] = 1;
+      volts[0] = volts_V;
       FieldCase fieldCase =
           new FieldCase(
               electrodes,
               List.of(),
-              new Surroundings("air", 101_325, 293.15, Double.NaN, Double.NaN, null, null),
+              new Surroundings("air", 101_300, 293.15, Double.NaN, Double.NaN, null, null),
               new EdgesAsMade(edgeRadius_m, Map.of()),
               List.of(new Duty("duty", volts, new double[volts.length])),
-              new Permitted(Permitted.Criterion.FIXED, 3e6, 1, 0.8, 1));
+              permitted);
       FieldResult result =
           FieldSolver.solve(
               assembly,
