@@ -1,11 +1,8 @@
 package org.edgefield.curvature.node;
 
-import java.util.stream.IntStream;
 import org.edgefield.curvature.SurfaceNodes;
-import org.edgefield.importer.brep.ExactGeometry;
 import org.edgefield.importer.mesh.SurfaceMesh;
 import org.edgefield.importer.mesh.spatial.TriangleCursor;
-import org.edgefield.importer.mesh.spatial.TriangleTree;
 
 /**
  * Local wall thickness: the length of a ray from a node into the solid, against its normal, to
@@ -22,48 +19,23 @@ public final class WallThickness {
    */
   private static final double INSET = 1e-3;
 
-  private static final int CHUNK = 4096;
+  private final double[] start;
+  private final double[] normal;
 
-  private WallThickness() {}
-
-  /**
-   * Thickness per node.
-   *
-   * @param geometry tells the part of each face
-   * @return metres, infinite where the ray leaves nowhere (an open mesh)
-   */
-  public static double[] perNode(ExactGeometry geometry, SurfaceMesh mesh, SurfaceNodes nodes) {
-    int[] trianglePart = new int[mesh.triangleCount()];
-    for (int t = 0; t < trianglePart.length; t++) {
-      trianglePart[t] = geometry.facePart(mesh.triangleFace()[t]);
-    }
-    TriangleTree tree = TriangleTree.build(mesh.xyz(), mesh.triangles(), trianglePart);
-    int n = nodes.count();
-    double[] start = startPoints(mesh, nodes);
-    int[] part = new int[n];
-    for (int c = 0; c < nodes.cornerNode().length; c++) {
-      part[nodes.cornerNode()[c]] = trianglePart[c / 3];
-    }
-    double[] thickness = new double[n];
-    // Each node's value is its own affair, so the order of the chunks does not matter.
-    IntStream.range(0, (n + CHUNK - 1) / CHUNK)
-        .parallel()
-        .forEach(
-            chunk -> {
-              TriangleCursor cursor = tree.cursor();
-              int last = -1;
-              for (int i = chunk * CHUNK; i < Math.min(n, (chunk + 1) * CHUNK); i++) {
-                if (part[i] != last) {
-                  last = part[i];
-                  cursor.allowOnly(last);
-                }
-                thickness[i] = ray(cursor, start, nodes.normal(), 3 * i);
-              }
-            });
-    return thickness;
+  /** Prepares the rays of all nodes. */
+  public WallThickness(SurfaceMesh mesh, SurfaceNodes nodes) {
+    start = startPoints(mesh, nodes);
+    normal = nodes.normal();
   }
 
-  private static double ray(TriangleCursor cursor, double[] start, double[] normal, int at) {
+  /**
+   * Thickness at a node.
+   *
+   * @param cursor over a tree of the mesh, restricted to the node's part
+   * @return metres, infinite where the ray leaves nowhere (an open mesh)
+   */
+  public double at(TriangleCursor cursor, int node) {
+    int at = 3 * node;
     cursor.ray(
         start[at],
         start[at + 1],

@@ -90,7 +90,7 @@ final class AmbientField {
     if (sites.form[s] != Sites.SMOOTH) {
       FluxTube tube = new FluxTube();
       double slim = tube.smooth(k1, c1, k2, c2).resistance(height, height);
-      edge = Math.min(1, slim / sites.tube(s, tube).resistance(height, height));
+      edge = Math.min(1, slim / sites.free(s, tube, Double.NaN).resistance(height, height));
     }
     return strength * cos * (1 + (gamma - 1) * edge);
   }

@@ -5,10 +5,12 @@ import java.util.List;
 import java.util.stream.IntStream;
 import org.edgefield.curvature.Features;
 import org.edgefield.curvature.SurfaceNodes;
+import org.edgefield.field.contact.HiddenTriangles;
 import org.edgefield.field.edge.RoundedCorner;
 import org.edgefield.field.gas.FieldProfile;
 import org.edgefield.field.gas.PermittedField;
 import org.edgefield.field.hotspot.LocalLaw;
+import org.edgefield.field.hotspot.SharpVertices;
 import org.edgefield.field.job.Duty;
 import org.edgefield.field.job.Electrode;
 import org.edgefield.field.job.FieldCase;
@@ -39,6 +41,7 @@ import org.edgefield.importer.mesh.spatial.TriangleTree;
 public final class EstimateModel implements LocalLaw {
   private final FieldCase fieldCase;
   private final Sites sites;
+  private final SharpVertices sharp;
   private final int[] electrode;
   private final double[] toInfinity;
   private final Opposing[] opposing;
@@ -64,12 +67,21 @@ public final class EstimateModel implements LocalLaw {
     }
     progress.report("estimate", 0, "");
     TriangleTree tree = TriangleTree.build(mesh.xyz(), mesh.triangles(), group);
-    sites = new SiteBuilder(assembly, mesh, nodes, features, fieldCase.edges(), tree).build();
+    boolean[] hidden = HiddenTriangles.of(assembly, mesh, electrodeOfPart);
+    SiteBuilder builder =
+        new SiteBuilder(assembly, mesh, nodes, features, fieldCase.edges(), tree, hidden);
+    sites = builder.build();
+    sharp = builder.sharp();
     int count = sites.count();
     electrode = new int[count];
-    for (int s = 0; s < count; s++) {
-      electrode[s] = electrodeOfPart[sites.part[s]];
+    boolean[] seen = new boolean[count];
+    for (int i = 0; i < nodes.cornerNode().length; i++) {
+      seen[sites.siteOfNode[nodes.cornerNode()[i]]] |= !hidden[i / 3];
     }
+    for (int s = 0; s < count; s++) {
+      electrode[s] = seen[s] ? electrodeOfPart[sites.part[s]] : -1;
+    }
+    Shelter.find(sites, electrode, fieldCase, assembly.parts(), nodes, tree);
     int electrodes = fieldCase.electrodes().size();
     EarthPlane plane = fieldCase.surroundings().earthPlane();
     opposing = new Opposing[electrodes + 1];
@@ -423,6 +435,11 @@ public final class EstimateModel implements LocalLaw {
       warnings.add(
           "edge radius as made above a tenth of the body's thickness: model the rounding instead");
     }
+  }
+
+  @Override
+  public SharpVertices sharp() {
+    return sharp;
   }
 
   /** Remarks for the user. */

@@ -17,6 +17,13 @@ import org.edgefield.field.edge.RoundedWedge;
  *   <li>rounded edge of a thick body: the spread of {@link RoundedWedge} up to the body's thickness
  *       t, then that of a plate of width w, then that of a wire:
  *       <pre>A = spread(s / r) (1 + s / t)^(1/2 - sigma) (1 + s / w)^(1/2)</pre>
+ *       <p>An edge that bends round a corner with the curvature k2 spreads along itself as
+ *       <pre>A = (1 + g k2 s / a)^a (1 + s^2 / b^2)^((1 - a)/2),  g = (1 + 1.77 k2 s) / (1 + k2 s)
+ *       </pre>
+ *       <p>with the slope of its bend at the surface and, for a bend by a right angle, a the
+ *       difference a0 between the exponents of a right-angled corner and edge. At the distance e
+ *       from its end a straight edge takes on the factor (1 + s (1/e - 1/b))^a0, and stays below
+ *       the growth at the corner there.
  * </ul>
  *
  * <p>Mutable so that one object serves millions of points; one thread at a time.
@@ -30,6 +37,12 @@ final class FluxTube {
 
   /** Exponent of the field at a right-angled corner of a thin plate (memory). */
   private static final double PLATE_CORNER = 0.7034;
+
+  /** What a bend by a right angle adds to the exponent of a right-angled edge: the corner's. */
+  static final double BEND = RoundedCorner.EXPONENT - 1.0 / 3;
+
+  /** How much further a bend's corner lies outside than its slope says; as at rounded wedges. */
+  private static final double BEND_FAR = 1.77;
 
   private static final double RIGHT_ANGLE_EXPONENT = 1.0 / 3 + 1e-3;
 
@@ -57,6 +70,11 @@ final class FluxTube {
   private double radius;
   private double thickness;
   private double width;
+  private double arc;
+  private boolean straight;
+  private double ahead;
+  private double shelter = Double.POSITIVE_INFINITY;
+  private FluxTube neighbour;
 
   /** A smooth surface. */
   FluxTube smooth(double k1, double c1, double k2, double c2) {
@@ -66,12 +84,21 @@ final class FluxTube {
     this.c2 = c2;
     wedge = null;
     corner = false;
+    shelter = Double.POSITIVE_INFINITY;
     return this;
   }
 
-  /** A rounded edge with its curvature k2 and the term c2 along the edge. */
+  /** A rounded edge with its curvature k2, the term c2 and the exponent along the edge. */
   FluxTube edge(
-      RoundedWedge wedge, double radius, double thickness, double width, double k2, double c2) {
+      RoundedWedge wedge,
+      double radius,
+      double thickness,
+      double width,
+      double k2,
+      double c2,
+      double arc,
+      boolean straight,
+      double ahead) {
     this.k1 = 1 / radius;
     this.c1 = 0;
     this.k2 = k2;
@@ -81,6 +108,10 @@ final class FluxTube {
     this.radius = radius;
     this.thickness = thickness;
     this.width = width;
+    this.arc = arc;
+    this.straight = straight;
+    this.ahead = ahead;
+    shelter = Double.POSITIVE_INFINITY;
     return this;
   }
 
@@ -92,28 +123,76 @@ final class FluxTube {
    */
   FluxTube corner(
       RoundedWedge wedge, double radius, double thickness, double width, double endTerm) {
-    edge(wedge, radius, thickness, width, 1 / radius, endTerm);
+    edge(wedge, radius, thickness, width, 1 / radius, endTerm, 1, false, 0);
     corner = true;
     return this;
   }
 
+  /** The tube of a neighbour, to be set before {@link #sheltered}. */
+  FluxTube neighbour() {
+    if (neighbour == null) {
+      neighbour = new FluxTube();
+    }
+    return neighbour;
+  }
+
+  /** From a distance on the tube widens no faster than its neighbour's. */
+  void sheltered(double distance) {
+    shelter = distance;
+  }
+
   /** Cross-section at a distance over that at the conductor; {@code reach} is the gap. */
   double growth(double s, double reach) {
+    if (s <= shelter) {
+      return free(s, reach);
+    }
+    double own = free(s, reach) / free(shelter, reach);
+    double other = neighbour.free(s, reach) / neighbour.free(shelter, reach);
+    return free(shelter, reach) * Math.min(own, Math.max(1, other));
+  }
+
+  private double free(double s, double reach) {
     if (wedge == null) {
       return direction(k1, c1, s, reach) * direction(k2, c2, s, reach);
     }
     if (corner && wedge.exponent() <= RIGHT_ANGLE_EXPONENT) {
-      return RoundedCorner.spread(s / radius)
-          * Math.pow(1 + s / (CORNER_SHARE * thickness), PLATE_CORNER - RoundedCorner.EXPONENT)
-          * Math.pow(
-              (1 + s / (CORNER_SHARE * width)) * (1 + s * Math.sqrt(c2) / (2 * CORNER_SHARE)),
-              1 - PLATE_CORNER / 2);
+      return corner(s, thickness, width, 1 / Math.sqrt(c2));
     }
     double across =
         wedge.spread(s / radius)
             * Math.pow(1 + s / thickness, 0.5 - wedge.exponent())
             * Math.sqrt(1 + s / width);
-    return corner ? across * across : across * direction(k2, c2, s, reach);
+    if (corner) {
+      return across * across;
+    }
+    if (!straight) {
+      return across * (arc < 1 && k2 > 0 ? bend(s) : direction(k2, c2, s, reach));
+    }
+    double along = direction(k2, c2, s, reach) * Math.pow(1 + ahead * s, BEND);
+    if (wedge.exponent() > RIGHT_ANGLE_EXPONENT) {
+      return across * along;
+    }
+    // No place on a straight edge is more exposed than the corner at its end.
+    double length = 2 / Math.sqrt(c2);
+    double thin = Math.min(length, thickness);
+    double wide = Math.min(Math.max(length, thickness), width);
+    return Math.min(across * along, corner(s, thin, wide, Math.max(length, width) / 2));
+  }
+
+  /** Spread at a right-angled corner: its own, then a plate's corner, a strip's, a whole body's. */
+  private double corner(double s, double thin, double wide, double halfLength) {
+    return RoundedCorner.spread(s / radius)
+        * Math.pow(1 + s / (CORNER_SHARE * thin), PLATE_CORNER - RoundedCorner.EXPONENT)
+        * Math.pow(
+            (1 + s / (CORNER_SHARE * wide)) * (1 + s / (2 * CORNER_SHARE * halfLength)),
+            1 - PLATE_CORNER / 2);
+  }
+
+  /** Along an edge that bends round a corner: its own radius first, then the corner's exponent. */
+  private double bend(double s) {
+    double y = k2 * s;
+    double g = (1 + BEND_FAR * y) / (1 + y);
+    return Math.pow(1 + y / arc * g, arc) * Math.pow(1 + c2 * s * s, 0.5 * (1 - arc));
   }
 
   private static double direction(double k, double c, double s, double reach) {
@@ -121,7 +200,10 @@ final class FluxTube {
   }
 
   private boolean parallel() {
-    return wedge == null && parallel(k1, c1) && parallel(k2, c2);
+    return wedge == null
+        && shelter == Double.POSITIVE_INFINITY
+        && parallel(k1, c1)
+        && parallel(k2, c2);
   }
 
   private static boolean parallel(double k, double c) {

@@ -110,7 +110,8 @@ final class Opposing {
 
   private static final double NEARLY_STRAIGHT = 0.9999;
 
-  private static int farSite(Sites sites, SurfaceNodes nodes, TriangleCursor cursor) {
+  /** Site nearest to where a cursor last hit. */
+  static int farSite(Sites sites, SurfaceNodes nodes, TriangleCursor cursor) {
     int corner =
         cursor.weight(0) >= cursor.weight(1)
             ? (cursor.weight(0) >= cursor.weight(2) ? 0 : 2)

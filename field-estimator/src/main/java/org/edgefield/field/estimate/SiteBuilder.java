@@ -4,14 +4,14 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
 import java.util.stream.IntStream;
-import org.edgefield.curvature.EdgeClass;
-import org.edgefield.curvature.EdgeFeature;
 import org.edgefield.curvature.Features;
 import org.edgefield.curvature.Features.RoundedEdge;
 import org.edgefield.curvature.SurfaceNodes;
+import org.edgefield.curvature.node.WallThickness;
 import org.edgefield.field.edge.RoundedWedge;
 import org.edgefield.field.hotspot.MeshAreas;
 import org.edgefield.field.hotspot.NodeFaces;
+import org.edgefield.field.hotspot.SharpVertices;
 import org.edgefield.field.job.EdgesAsMade;
 import org.edgefield.field.result.Law;
 import org.edgefield.importer.brep.Assembly;
@@ -37,9 +37,13 @@ final class SiteBuilder {
   private final Assembly assembly;
   private final SurfaceMesh mesh;
   private final SurfaceNodes nodes;
-  private final Features features;
   private final EdgesAsMade asMade;
   private final TriangleTree tree;
+  private final SharpVertices sharp;
+  private final WallThickness walls;
+
+  /** Turn of the surface per face: the integral of its Gaussian curvature, convex places only. */
+  private final double[] turn;
 
   /** A face of each node: its smallest convex rounded edge where it has one, else any. */
   private final int[] nodeFace;
@@ -57,11 +61,11 @@ final class SiteBuilder {
       SurfaceNodes nodes,
       Features features,
       EdgesAsMade asMade,
-      TriangleTree tree) {
+      TriangleTree tree,
+      boolean[] hidden) {
     this.assembly = assembly;
     this.mesh = mesh;
     this.nodes = nodes;
-    this.features = features;
     this.asMade = asMade;
     this.tree = tree;
     int faces = assembly.geometry().faceCount();
@@ -75,6 +79,25 @@ final class SiteBuilder {
       firstNode[v] = n;
     }
     nodeFace = NodeFaces.of(mesh, nodes, rounded);
+    sharp = SharpVertices.of(mesh, features, hidden);
+    walls = new WallThickness(mesh, nodes);
+    turn = turns(faces);
+  }
+
+  private double[] turns(int faces) {
+    double[] sum = new double[faces];
+    double[] area = MeshAreas.triangles(mesh);
+    for (int i = 0; i < nodes.cornerNode().length; i++) {
+      int n = nodes.cornerNode()[i];
+      sum[mesh.triangleFace()[i / 3]] +=
+          area[i / 3] / 3 * Math.max(0, nodes.k1()[n]) * Math.max(0, nodes.k2()[n]);
+    }
+    return sum;
+  }
+
+  /** Where edges are sharp. */
+  SharpVertices sharp() {
+    return sharp;
   }
 
   Sites build() {
@@ -83,6 +106,7 @@ final class SiteBuilder {
     int count = number(siteOfVertex, siteOfNode);
     Sites sites = new Sites(siteOfNode, count);
     Arrays.fill(sites.node, -1);
+    double[] bend = bends();
     for (int n = 0; n < nodes.count(); n++) {
       int s = siteOfNode[n];
       int v = nodes.nodeVertex()[n];
@@ -90,8 +114,8 @@ final class SiteBuilder {
         sites.node[s] = n;
         sites.part[s] = assembly.geometry().facePart(nodeFace[n]);
         System.arraycopy(mesh.xyz(), 3 * v, sites.position, 3 * s, 3);
-        sites.k1[s] = nodes.k1()[n];
-        sites.k2[s] = nodes.k2()[n];
+        sites.k1[s] = Math.min(nodes.k1()[n], SPIKE * bend[n]);
+        sites.k2[s] = Math.min(nodes.k2()[n], SPIKE * bend[n]);
         sites.law[s] = Law.PARALLEL_SURFACES;
       }
       for (int c = 0; c < 3; c++) {
@@ -100,6 +124,7 @@ final class SiteBuilder {
     }
     normalise(sites.normal);
     double[] depth = new double[count];
+    double[] ahead = new double[count];
     int blocks = (count + BLOCK - 1) / BLOCK;
     IntStream.range(0, blocks)
         .parallel()
@@ -108,30 +133,56 @@ final class SiteBuilder {
               TriangleCursor cursor = tree.cursor();
               int to = Math.min(count, (b + 1) * BLOCK);
               for (int s = b * BLOCK; s < to; s++) {
-                smooth(sites, s, depth, cursor);
+                smooth(sites, s, depth, ahead, cursor);
               }
             });
-    roundedEdges(sites, depth);
+    roundedEdges(sites, depth, ahead);
     roundedCorners(sites, depth);
     sharpEdges(sites, siteOfVertex);
     return sites;
   }
 
-  /** Numbers the sites; vertices on sharp convex edges and corners get one of their own. */
-  private int number(int[] siteOfVertex, int[] siteOfNode) {
-    boolean[] sharp = new boolean[mesh.vertexCount()];
-    for (int g = 0; g < mesh.segmentCount(); g++) {
-      EdgeClass c = features.edge(mesh.segmentEdge()[g]).edgeClass();
-      if (c == EdgeClass.SHARP_CONVEX || c == EdgeClass.MIXED) {
-        sharp[mesh.segmentVertices()[2 * g]] = true;
-        sharp[mesh.segmentVertices()[2 * g + 1]] = true;
+  /** Ratio of a node's curvature to that of its surroundings above which it is a spike. */
+  private static final double SPIKE = 2;
+
+  /**
+   * How much the surface bends around a node, as the largest angle between its normal and a
+   * neighbour's, per distance. Where a surface degenerates (blends that run out into a point) its
+   * curvature may rise without limit on a spot too small to matter.
+   */
+  private double[] bends() {
+    double[] most = new double[nodes.count()];
+    double[] x = mesh.xyz();
+    double[] normal = nodes.normal();
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      for (int c = 0; c < 3; c++) {
+        int i = 3 * t + c;
+        int j = 3 * t + (c + 1) % 3;
+        int a = nodes.cornerNode()[i];
+        int b = nodes.cornerNode()[j];
+        double turned = 0;
+        double apart = 0;
+        for (int k = 0; k < 3; k++) {
+          double dn = normal[3 * a + k] - normal[3 * b + k];
+          double dx = x[3 * mesh.triangles()[i] + k] - x[3 * mesh.triangles()[j] + k];
+          turned += dn * dn;
+          apart += dx * dx;
+        }
+        double rate = Math.sqrt(turned / apart);
+        most[a] = Math.max(most[a], rate);
+        most[b] = Math.max(most[b], rate);
       }
     }
+    return most;
+  }
+
+  /** Numbers the sites; vertices where an edge is sharp get one of their own. */
+  private int number(int[] siteOfVertex, int[] siteOfNode) {
     Arrays.fill(siteOfVertex, -1);
     int count = 0;
     for (int n = 0; n < nodes.count(); n++) {
       int v = nodes.nodeVertex()[n];
-      if (!sharp[v]) {
+      if (!sharp.isSharp(v)) {
         siteOfNode[n] = count++;
         continue;
       }
@@ -154,7 +205,7 @@ final class SiteBuilder {
   }
 
   /** Curvature terms of a smooth site from the extent of the body behind it. */
-  private void smooth(Sites sites, int s, double[] depth, TriangleCursor cursor) {
+  private void smooth(Sites sites, int s, double[] depth, double[] ahead, TriangleCursor cursor) {
     int n = sites.node[s];
     Part part = assembly.parts().get(sites.part[s]);
     double[] normal = Arrays.copyOfRange(sites.normal, 3 * s, 3 * s + 3);
@@ -174,7 +225,15 @@ final class SiteBuilder {
     double size = part.size_m();
     cursor.allowOnly(sites.part[s]);
     double[] p = Arrays.copyOfRange(sites.position, 3 * s, 3 * s + 3);
-    depth[s] = chord(cursor, p, normal, -1, 1e-6 * size, size);
+    depth[s] = Math.min(walls.at(cursor, n), size);
+    RoundedEdge edge = rounded[nodeFace[n]];
+    if (edge != null) {
+      double[] centre = p.clone();
+      for (int c = 0; c < 3; c++) {
+        centre[c] -= Math.min(edge.radius_m(), 0.5 * depth[s]) * normal[c];
+      }
+      ahead[s] = nearEnd(cursor, centre, alongIsFirst(edge, k1, k2) ? d1 : d2, size);
+    }
     for (int c = 0; c < 3; c++) {
       p[c] -= 0.5 * depth[s] * normal[c];
     }
@@ -194,6 +253,17 @@ final class SiteBuilder {
    */
   private static double quadratic(double k, double half, double breadth) {
     return Math.min(k * k, Math.pow(breadth, -1.5) * Math.pow(k / half, 0.25));
+  }
+
+  /** Whether a rounded edge runs in the direction of the larger curvature. */
+  private static boolean alongIsFirst(RoundedEdge edge, double k1, double k2) {
+    double across = 1 / edge.radius_m();
+    return Math.abs(k2 - across) < Math.abs(k1 - across);
+  }
+
+  /** The shorter way from an inner point along a line to where the part ends. */
+  private static double nearEnd(TriangleCursor cursor, double[] p, double[] d, double size) {
+    return Math.min(chord(cursor, p, d, 1, 0, size), chord(cursor, p, d, -1, 0, size));
   }
 
   /** Half the width of the part through an inner point. */
@@ -234,7 +304,7 @@ final class SiteBuilder {
   }
 
   /** Turns sites on recognised rounded edges of bodies thicker than the round into edge sites. */
-  private void roundedEdges(Sites sites, double[] depth) {
+  private void roundedEdges(Sites sites, double[] depth, double[] ahead) {
     double[] thin = new double[rounded.length];
     double[] wide = new double[rounded.length];
     Arrays.fill(thin, Double.POSITIVE_INFINITY);
@@ -260,7 +330,7 @@ final class SiteBuilder {
       double across = 1 / radius;
       double k1 = sites.k1[s];
       double k2 = sites.k2[s];
-      double along = Math.abs(k2 - across) < Math.abs(k1 - across) ? Math.min(k1, across) : k2;
+      double along = alongIsFirst(r, k1, k2) ? Math.min(k1, across) : k2;
       sites.form[s] = Sites.EDGE;
       sites.law[s] = Law.ROUNDED_WEDGE;
       sites.wedge[s] = wedge;
@@ -268,6 +338,10 @@ final class SiteBuilder {
       sites.width[s] = w;
       sites.k1[s] = across;
       sites.k2[s] = along;
+      // The turn of a fillet is that across it, seen from its side, times that along it.
+      double side = 1 - Math.cos(r.turning_rad());
+      sites.arc(s, turn[f] / Math.max(side, 1e-3));
+      sites.ahead(s, ahead[s]);
     }
   }
 
@@ -276,23 +350,27 @@ final class SiteBuilder {
    * not balls. The solid angle of the turn is the integral of the Gaussian curvature.
    */
   private void roundedCorners(Sites sites, double[] depth) {
-    double[] turn = new double[rounded.length];
     double[] thin = new double[rounded.length];
     double[] wide = new double[rounded.length];
+    double[] next = new double[rounded.length];
+    int[] thinnest = new int[rounded.length];
     Arrays.fill(thin, Double.POSITIVE_INFINITY);
-    double[] area = MeshAreas.triangles(mesh);
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      int f = mesh.triangleFace()[t];
-      for (int c = 0; c < 3; c++) {
-        int n = nodes.cornerNode()[3 * t + c];
-        turn[f] += area[t] / 3 * Math.max(0, nodes.k1()[n]) * Math.max(0, nodes.k2()[n]);
-      }
-    }
+    Arrays.fill(next, Double.POSITIVE_INFINITY);
     for (int s = 0; s < sites.count(); s++) {
       if (depth[s] > 0) {
         int f = nodeFace[sites.node[s]];
-        thin[f] = Math.min(thin[f], depth[s]);
+        if (depth[s] < thin[f]) {
+          thin[f] = depth[s];
+          thinnest[f] = s;
+        }
         wide[f] = Math.max(wide[f], depth[s]);
+      }
+    }
+    // The width is the least depth across the thinnest one.
+    for (int s = 0; s < sites.count(); s++) {
+      int f = nodeFace[sites.node[s]];
+      if (depth[s] > 0 && Math.abs(dot(sites.normal, s, thinnest[f])) < ACROSS) {
+        next[f] = Math.min(next[f], depth[s]);
       }
     }
     RoundedWedge right = RoundedWedge.ofInteriorAngle(Math.PI / 2);
@@ -309,7 +387,7 @@ final class SiteBuilder {
         sites.law[s] = Law.ROUNDED_WEDGE;
         sites.wedge[s] = turn[f] > RIGHT_CORNER_TURN ? SHARP_CORNER : right;
         sites.thickness[s] = Math.max(thin[f], 2 * radius);
-        sites.width[s] = Math.max(wide[f], 2 * radius);
+        sites.width[s] = Math.max(Math.min(next[f], wide[f]), 2 * radius);
         sites.end2[s] = inverseSquare(longestHalf(assembly.parts().get(sites.part[s])));
         sites.k1[s] = 1 / radius;
         sites.k2[s] = 1 / radius;
@@ -326,6 +404,9 @@ final class SiteBuilder {
   /** Solid angle up to which it counts as right-angled (an octant turns through pi / 2). */
   private static final double RIGHT_CORNER_TURN = 0.55 * Math.PI;
 
+  /** Cosine up to which two directions count as across each other. */
+  private static final double ACROSS = 0.3;
+
   /** Depth of the body in radii from which its round face may be a corner. */
   private static final double CORNER_DEPTH = 2.5;
 
@@ -339,25 +420,14 @@ final class SiteBuilder {
   /** Sharp edges and corners with their radius as made. */
   private void sharpEdges(Sites sites, int[] siteOfVertex) {
     int vertices = mesh.vertexCount();
-    double[] sharpest = new double[vertices];
-    Arrays.fill(sharpest, Double.POSITIVE_INFINITY);
     double[] tangent = new double[3 * vertices];
-    for (int g = 0; g < mesh.segmentCount(); g++) {
-      int edge = mesh.segmentEdge()[g];
-      EdgeClass c = features.edge(edge).edgeClass();
-      if (c != EdgeClass.SHARP_CONVEX && c != EdgeClass.MIXED) {
-        continue;
-      }
-      for (int end = 0; end < 2; end++) {
-        int v = mesh.segmentVertices()[2 * g + end];
-        double angle = angleAt(edge, mesh.segmentT()[2 * g + end]);
-        if (angle < sharpest[v]) {
-          sharpest[v] = angle;
-          for (int k = 0; k < 3; k++) {
-            tangent[3 * v + k] =
-                mesh.xyz()[3 * mesh.segmentVertices()[2 * g + 1] + k]
-                    - mesh.xyz()[3 * mesh.segmentVertices()[2 * g] + k];
-          }
+    for (int v = 0; v < vertices; v++) {
+      if (sharp.isSharp(v)) {
+        int[] ends = mesh.segmentVertices();
+        int g = sharp.segment(v);
+        for (int k = 0; k < 3; k++) {
+          tangent[3 * v + k] =
+              mesh.xyz()[3 * ends[2 * g + 1] + k] - mesh.xyz()[3 * ends[2 * g] + k];
         }
       }
     }
@@ -377,16 +447,15 @@ final class SiteBuilder {
       along[s] += normalCurvature(n, tangent, 3 * v);
       patches[s]++;
     }
+    double[] turns = vertexTurns();
     TriangleCursor cursor = tree.cursor();
     for (int v = 0; v < vertices; v++) {
       int s = siteOfVertex[v];
-      if (s < 0 || !(sharpest[v] < Math.PI - Math.toRadians(1))) {
+      if (s < 0) {
         continue;
       }
       double radius = Math.max(asMade.radius_m(sites.part[s]), LEAST_RADIUS);
-      boolean corner =
-          mesh.vertexKind()[v] == SurfaceMesh.ON_VERTEX
-              && features.isCorner(mesh.vertexEntity()[v]);
+      boolean corner = sharp.isCorner(v);
       Part part = assembly.parts().get(sites.part[s]);
       double sum =
           Math.sqrt(
@@ -397,21 +466,33 @@ final class SiteBuilder {
       double end = inverseSquare(corner ? longestHalf(part) : halfExtent(part, d));
       sites.form[s] = corner ? Sites.CORNER : Sites.EDGE;
       sites.law[s] = corner ? Law.CORNER_AS_MADE : Law.EDGE_AS_MADE;
-      sites.wedge[s] = RoundedWedge.ofInteriorAngle(Math.max(0, sharpest[v]));
+      sites.wedge[s] = RoundedWedge.ofInteriorAngle(Math.max(0, sharp.angle_rad(v)));
       sites.k1[s] = 1 / radius;
       sites.k2[s] = corner ? 1 / radius : patches[s] > 1 && sum > 0.1 ? along[s] / sum : 0;
       sites.end2[s] = end;
-      // A short arc along the edge spreads the flux only at first; beyond it the body's length
-      // counts.
-      sites.c2[s] = corner ? Math.max(end, sites.k2[s] * sites.k2[s]) : end;
-      behind(sites, s, v, radius, part, cursor);
+      sites.c2[s] = end;
+      sites.arc(s, turns[v]);
+      double near = behind(sites, s, v, radius, part, d, cursor);
+      if (!corner) {
+        sites.ahead(s, near);
+      }
     }
   }
 
   /**
-   * Thickness and width behind a sharp edge: rays along the faces' normals from the round's centre.
+   * Thickness and width behind a sharp edge or corner, the smallest and the next of the rays along
+   * the faces' normals from the round's centre.
+   *
+   * @return way to the nearer end of the edge
    */
-  private void behind(Sites sites, int s, int v, double radius, Part part, TriangleCursor cursor) {
+  private double behind(
+      Sites sites,
+      int s,
+      int v,
+      double radius,
+      Part part,
+      double[] tangent,
+      TriangleCursor cursor) {
     cursor.allowOnly(part.index());
     double size = part.size_m();
     double shift = Math.max(radius, 1e-5 * size);
@@ -420,32 +501,76 @@ final class SiteBuilder {
       p[k] = sites.position[3 * s + k] - shift * sites.normal[3 * s + k];
     }
     double thin = Double.POSITIVE_INFINITY;
-    double wide = 0;
+    double wide = Double.POSITIVE_INFINITY;
     for (int n = firstNode[v]; n >= 0; n = nextNode[n]) {
+      if (repeats(n, v)) {
+        continue;
+      }
       double[] normal = Arrays.copyOfRange(nodes.normal(), 3 * n, 3 * n + 3);
       double t = chord(cursor, p, normal, -1, 0, size) + shift;
+      wide = Math.min(wide, Math.max(thin, t));
       thin = Math.min(thin, t);
-      wide = Math.max(wide, t);
     }
     sites.thickness[s] = Math.max(thin, 2 * radius);
-    sites.width[s] = Math.max(wide, 2 * radius);
+    sites.width[s] = Math.max(wide < Double.POSITIVE_INFINITY ? wide : thin, 2 * radius);
+    return nearEnd(cursor, p, tangent, size);
   }
 
-  /** Interior angle at a curve parameter, linear between the samples. */
-  private double angleAt(int edge, double t) {
-    EdgeFeature feature = features.edge(edge);
-    double[] ts = feature.t();
-    double[] angles = feature.interiorAngle_rad();
-    int i = Arrays.binarySearch(ts, t);
-    if (i >= 0) {
-      return angles[i];
+  /** Whether an earlier node of the vertex has the same normal: two faces that join smoothly. */
+  private boolean repeats(int node, int v) {
+    for (int n = firstNode[v]; n != node; n = nextNode[n]) {
+      if (dot(nodes.normal(), n, node) > SAME_NORMAL) {
+        return true;
+      }
     }
-    int right = -i - 1;
-    if (right == 0 || right == ts.length) {
-      return angles[right == 0 ? 0 : ts.length - 1];
+    return false;
+  }
+
+  private static final double SAME_NORMAL = 0.98;
+
+  /**
+   * Angle through which the sharp edge at every mesh vertex turns from end to end, the larger of
+   * two that meet.
+   */
+  private double[] vertexTurns() {
+    double[] turns = new double[assembly.geometry().edgeCount()];
+    int[] segments = new int[turns.length];
+    double[] first = new double[3 * mesh.vertexCount()];
+    double[] here = new double[3];
+    for (int g = 0; g < mesh.segmentCount(); g++) {
+      int a = mesh.segmentVertices()[2 * g];
+      int b = mesh.segmentVertices()[2 * g + 1];
+      for (int k = 0; k < 3; k++) {
+        here[k] = mesh.xyz()[3 * b + k] - mesh.xyz()[3 * a + k];
+      }
+      normalise(here);
+      segments[mesh.segmentEdge()[g]]++;
+      for (int v : new int[] {a, b}) {
+        double cos = 0;
+        double seen = 0;
+        for (int k = 0; k < 3; k++) {
+          cos += here[k] * first[3 * v + k];
+          seen += Math.abs(first[3 * v + k]);
+        }
+        if (mesh.vertexKind()[v] == SurfaceMesh.ON_EDGE && seen > 0) {
+          turns[mesh.segmentEdge()[g]] += Math.acos(Math.max(-1, Math.min(1, cos)));
+        }
+        System.arraycopy(here, 0, first, 3 * v, 3);
+      }
     }
-    double w = (t - ts[right - 1]) / (ts[right] - ts[right - 1]);
-    return angles[right - 1] * (1 - w) + angles[right] * w;
+    double[] result = new double[mesh.vertexCount()];
+    for (int g = 0; g < mesh.segmentCount(); g++) {
+      int a = mesh.segmentVertices()[2 * g];
+      int b = mesh.segmentVertices()[2 * g + 1];
+      int e = mesh.segmentEdge()[g];
+      if (segments[e] > 1 && (sharp.isSharp(a) || sharp.isSharp(b))) {
+        // The vertices inside see all of the turn but half a segment at each end.
+        double turn = turns[e] * segments[e] / (segments[e] - 1);
+        result[a] = Math.max(result[a], turn);
+        result[b] = Math.max(result[b], turn);
+      }
+    }
+    return result;
   }
 
   /** Curvature of the surface at a node along a unit tangent (Euler's formula). */
@@ -456,6 +581,10 @@ final class SiteBuilder {
     }
     double cos2 = Math.min(1, c * c);
     return nodes.k1()[n] * cos2 + nodes.k2()[n] * (1 - cos2);
+  }
+
+  private static double dot(double[] v, int s, int t) {
+    return v[3 * s] * v[3 * t] + v[3 * s + 1] * v[3 * t + 1] + v[3 * s + 2] * v[3 * t + 2];
   }
 
   private static double inverseSquare(double x) {

@@ -1,5 +1,6 @@
 package org.edgefield.field.estimate;
 
+import java.util.Arrays;
 import org.edgefield.field.edge.RoundedWedge;
 import org.edgefield.field.result.Law;
 
@@ -48,6 +49,20 @@ final class Sites {
 
   final double[] end2;
 
+  /** Exponent of the tube's spread along an edge that bends round a corner; 1 on whole rims. */
+  final double[] arc;
+
+  /** What the near end of a straight edge adds: 1/distance to it less 1/half-length of the part. */
+  final double[] ahead;
+
+  final boolean[] straight;
+
+  /** Distance up to which a tube widens freely, infinite where nothing shelters it. */
+  final double[] shelter;
+
+  /** Site of the neighbour that shelters, -1 where the earth plane does or nothing. */
+  final int[] neighbour;
+
   /** Wedge of an edge site, else null. */
   final RoundedWedge[] wedge;
 
@@ -70,6 +85,13 @@ final class Sites {
     c2 = new double[count];
     end1 = new double[count];
     end2 = new double[count];
+    arc = new double[count];
+    ahead = new double[count];
+    straight = new boolean[count];
+    shelter = new double[count];
+    neighbour = new int[count];
+    Arrays.fill(shelter, Double.POSITIVE_INFINITY);
+    Arrays.fill(neighbour, -1);
     wedge = new RoundedWedge[count];
     thickness = new double[count];
     width = new double[count];
@@ -84,6 +106,36 @@ final class Sites {
     return k1[site] > 0 ? 1 / k1[site] : Double.POSITIVE_INFINITY;
   }
 
+  /** Notes how far along a straight edge the body reaches on the shorter side. */
+  void ahead(int site, double distance_m) {
+    double half = Math.sqrt(end2[site]);
+    straight[site] = k2[site] < STRAIGHT * half;
+    if (straight[site]) {
+      ahead[site] = Math.max(0, 1 / Math.max(distance_m, radius(site)) - half);
+    }
+  }
+
+  /**
+   * Curvature along an edge, in units of 1 / half-length of the part, up to which it is straight.
+   */
+  private static final double STRAIGHT = 0.2;
+
+  /**
+   * Notes through which angle an edge turns along its length. An edge that bends round a corner
+   * spreads the flux near by like the rim of its own radius, far away like the corner of a plate
+   * between its two straight runs; one that turns by half a circle or more is a rim for good.
+   */
+  void arc(int site, double turn_rad) {
+    double quarters = turn_rad / (Math.PI / 2);
+    double bend =
+        quarters <= 1
+            ? FluxTube.BEND * quarters
+            : FluxTube.BEND + (1 - FluxTube.BEND) * (quarters - 1);
+    // A bend as wide as the body is its rim.
+    double wide = k2[site] * k2[site] > end2[site] ? Math.sqrt(end2[site]) / k2[site] : 1;
+    arc[site] = Math.min(1, Math.max(1e-3, bend + (1 - bend) * wide));
+  }
+
   /** Sets the tube to a site. */
   FluxTube tube(int site, FluxTube tube) {
     return tube(site, tube, Double.NaN);
@@ -96,6 +148,21 @@ final class Sites {
    * @param radius_m the radius, NaN to keep the site's own
    */
   FluxTube tube(int site, FluxTube tube, double radius_m) {
+    free(site, tube, radius_m);
+    if (shelter[site] < Double.POSITIVE_INFINITY) {
+      FluxTube other = tube.neighbour();
+      if (neighbour[site] < 0) {
+        other.smooth(0, 0, 0, 0);
+      } else {
+        free(neighbour[site], other, Double.NaN);
+      }
+      tube.sheltered(shelter[site]);
+    }
+    return tube;
+  }
+
+  /** Sets the tube to a site as if nothing sheltered it. */
+  FluxTube free(int site, FluxTube tube, double radius_m) {
     double r = Double.isNaN(radius_m) ? radius(site) : radius_m;
     if (form[site] == SMOOTH) {
       if (Double.isNaN(radius_m)) {
@@ -113,7 +180,16 @@ final class Sites {
     if (form[site] == CORNER) {
       return tube.corner(wedge[site], r, t, w, end2[site]);
     }
-    return tube.edge(wedge[site], r, t, w, k2[site], c2[site]);
+    return tube.edge(
+        wedge[site],
+        r,
+        t,
+        w,
+        k2[site],
+        arc[site] < 1 ? end2[site] : c2[site],
+        arc[site],
+        straight[site],
+        ahead[site]);
   }
 
   /**

@@ -24,6 +24,7 @@ public final class HotSpots {
   private final SurfaceMesh mesh;
   private final SurfaceNodes nodes;
   private final Features features;
+  private final SharpVertices sharp;
   private final LocalLaw model;
   private final PermittedField permitted;
   private final double amber;
@@ -46,11 +47,12 @@ public final class HotSpots {
       double amber) {
     this.mesh = mesh;
     this.nodes = nodes;
-    this.features = features;
     this.model = model;
     this.permitted = permitted;
     this.amber = amber;
-    regions = new Regions(mesh, nodes, features, assembly.geometry().faceCount());
+    this.features = features;
+    sharp = model.sharp();
+    regions = new Regions(mesh, nodes, features, sharp, assembly.geometry().faceCount());
     nodePart = new int[nodes.count()];
     nodeArea = new double[nodes.count()];
     double[] area = MeshAreas.triangles(mesh);
@@ -170,11 +172,11 @@ public final class HotSpots {
     }
     double sum = 0;
     for (int g = 0; g < mesh.segmentCount(); g++) {
-      if (features.edge(mesh.segmentEdge()[g]).edgeClass() != EdgeClass.SHARP_CONVEX) {
-        continue;
-      }
       int a = mesh.segmentVertices()[2 * g];
       int b = mesh.segmentVertices()[2 * g + 1];
+      if (!sharp.isSharp(a) || !sharp.isSharp(b) || smooth(mesh.segmentEdge()[g])) {
+        continue;
+      }
       double ends = (inside[a] ? 0.5 : 0) + (inside[b] ? 0.5 : 0);
       if (ends > 0) {
         double d2 = 0;
@@ -186,5 +188,10 @@ public final class HotSpots {
       }
     }
     return sum;
+  }
+
+  private boolean smooth(int edge) {
+    EdgeClass c = features.edge(edge).edgeClass();
+    return c != EdgeClass.SHARP_CONVEX && c != EdgeClass.MIXED;
   }
 }

@@ -8,6 +8,9 @@ import org.edgefield.field.gas.FieldProfile;
  * to the solved field.
  */
 public interface LocalLaw {
+  /** Where edges are sharp. */
+  SharpVertices sharp();
+
   /**
    * Part at the far end of the field line that governs a node.
    *

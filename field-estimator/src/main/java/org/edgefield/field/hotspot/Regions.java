@@ -3,7 +3,6 @@ package org.edgefield.field.hotspot;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import org.edgefield.curvature.EdgeClass;
 import org.edgefield.curvature.Features;
 import org.edgefield.curvature.Features.RoundedEdge;
 import org.edgefield.curvature.SurfaceNodes;
@@ -28,14 +27,17 @@ final class Regions {
   private final SurfaceMesh mesh;
   private final SurfaceNodes nodes;
   private final Features features;
+  private final SharpVertices sharp;
   private final long[] key;
   private final int[] start;
   private final int[] neighbour;
 
-  Regions(SurfaceMesh mesh, SurfaceNodes nodes, Features features, int faceCount) {
+  Regions(
+      SurfaceMesh mesh, SurfaceNodes nodes, Features features, SharpVertices sharp, int faceCount) {
     this.mesh = mesh;
     this.nodes = nodes;
     this.features = features;
+    this.sharp = sharp;
     key = keys(faceCount);
     int[] degree = new int[nodes.count() + 1];
     int[] vertexNode = new int[mesh.vertexCount()];
@@ -77,24 +79,17 @@ final class Regions {
   private long[] keys(int faceCount) {
     RoundedEdge[] rounded = NodeFaces.rounded(features, faceCount);
     int[] nodeFace = NodeFaces.of(mesh, nodes, rounded);
-    long[] vertexKey = new long[mesh.vertexCount()];
-    for (int g = 0; g < mesh.segmentCount(); g++) {
-      int edge = mesh.segmentEdge()[g];
-      if (features.edge(edge).edgeClass() == EdgeClass.SHARP_CONVEX) {
-        for (int end = 0; end < 2; end++) {
-          int v = mesh.segmentVertices()[2 * g + end];
-          boolean corner =
-              mesh.vertexKind()[v] == SurfaceMesh.ON_VERTEX
-                  && features.isCorner(mesh.vertexEntity()[v]);
-          vertexKey[v] = corner ? CORNER | mesh.vertexEntity()[v] : SHARP | edge;
-        }
-      }
-    }
     long[] result = new long[nodes.count()];
     for (int n = 0; n < result.length; n++) {
-      long k = vertexKey[nodes.nodeVertex()[n]];
+      int v = nodes.nodeVertex()[n];
       int f = nodeFace[n];
-      result[n] = k != 0 ? k : f < 0 ? -1 : rounded[f] != null ? ROUNDED | f : f;
+      if (sharp.isCorner(v)) {
+        result[n] = CORNER | mesh.vertexEntity()[v];
+      } else if (sharp.isSharp(v)) {
+        result[n] = SHARP | mesh.segmentEdge()[sharp.segment(v)];
+      } else {
+        result[n] = f < 0 ? -1 : rounded[f] != null ? ROUNDED | f : f;
+      }
     }
     return result;
   }

@@ -6,6 +6,7 @@ import java.util.Map;
 import org.edgefield.curvature.SurfaceNodes;
 import org.edgefield.field.bem.surface.CurvedTriangles;
 import org.edgefield.field.bem.surface.SideMidPoints;
+import org.edgefield.field.contact.HiddenTriangles;
 import org.edgefield.field.job.FieldCase;
 import org.edgefield.field.job.Surroundings.EarthPlane;
 import org.edgefield.importer.brep.Assembly;
@@ -40,7 +41,7 @@ record ChargedSurface(
   static ChargedSurface of(
       Assembly assembly, SurfaceMesh mesh, SurfaceNodes nodes, FieldCase fieldCase) {
     int[] electrodeOfPart = fieldCase.electrodeOfPart(assembly.parts().size());
-    boolean[] hidden = ContactCheck.hidden(assembly, mesh, electrodeOfPart);
+    boolean[] hidden = HiddenTriangles.of(assembly, mesh, electrodeOfPart);
     EarthPlane plane = fieldCase.surroundings().earthPlane();
     int[] chosen = new int[mesh.triangleCount()];
     int n = 0;

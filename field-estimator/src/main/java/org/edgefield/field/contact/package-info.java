@@ -1,0 +1,2 @@
+/** Bodies inside or against each other. */
+package org.edgefield.field.contact;
