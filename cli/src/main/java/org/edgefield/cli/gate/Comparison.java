@@ -13,10 +13,10 @@ import org.edgefield.cli.gate.GateFinding.Change;
 
 /**
  * Compares a result with the accepted one. Hot spots match by part and position: the accepted one
- * whose peak lies within the tolerance (of several, the one of the same feature), or else those
- * whose region holds the peak, or whose peak the region holds, give or take the tolerance; of these
- * the highest utilisation counts, so that a region may split or merge. Face numbers play no role: a
- * renumbered model compares equal.
+ * whose peak lies within the tolerance (of several, the one of the same feature, at one place the
+ * one of the nearest utilisation), or else those whose region holds the peak, or whose peak the
+ * region holds, give or take the tolerance; of these the highest utilisation counts, so that a
+ * region may split or merge. Face numbers play no role: a renumbered model compares equal.
  *
  * <p>Limit: a region is known by at most 32 points, so beside a large accepted region of the same
  * part a new hot spot nearer than their spacing counts as part of it; it still fails as worse where
@@ -26,6 +26,9 @@ import org.edgefield.cli.gate.GateFinding.Change;
  * @param remarks what differs in limits and voltages, one line each
  */
 record Comparison(Map<String, List<GateFinding>> findings, List<String> remarks) {
+
+  /** Peaks nearer than this share their place: edges that meet at a corner. */
+  private static final double SAME_PLACE_M = 1e-9;
 
   /**
    * Compares.
@@ -121,6 +124,10 @@ record Comparison(Map<String, List<GateFinding>> findings, List<String> remarks)
       if (sameA != sameB) {
         return sameA ? a : b;
       }
+    }
+    if (Math.abs(toA - toB) < SAME_PLACE_M) {
+      double now = spot.utilisation();
+      return Math.abs(a.utilisation() - now) < Math.abs(b.utilisation() - now) ? a : b;
     }
     return toA < toB ? a : b;
   }

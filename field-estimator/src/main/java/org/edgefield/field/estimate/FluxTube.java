@@ -33,7 +33,7 @@ final class FluxTube {
    * Share of the body's sizes at which a corner stops to act alone; puts the estimate some 10 %
    * above the isolated cube's corner.
    */
-  private static final double CORNER_SHARE = 1.4;
+  private static final double CORNER_SHARE = 1.05;
 
   /** Exponent of the field at a right-angled corner of a thin plate (memory). */
   private static final double PLATE_CORNER = 0.7034;

@@ -366,10 +366,11 @@ final class SiteBuilder {
         wide[f] = Math.max(wide[f], depth[s]);
       }
     }
-    // The width is the least depth across the thinnest one.
+    // The width is the least depth of the rays that do not end at the wall across the thinnest.
     for (int s = 0; s < sites.count(); s++) {
       int f = nodeFace[sites.node[s]];
-      if (depth[s] > 0 && Math.abs(dot(sites.normal, s, thinnest[f])) < ACROSS) {
+      double across = depth[s] * Math.abs(dot(sites.normal, s, thinnest[f]));
+      if (depth[s] > 0 && across < 0.5 * thin[f]) {
         next[f] = Math.min(next[f], depth[s]);
       }
     }
@@ -403,9 +404,6 @@ final class SiteBuilder {
 
   /** Solid angle up to which it counts as right-angled (an octant turns through pi / 2). */
   private static final double RIGHT_CORNER_TURN = 0.55 * Math.PI;
-
-  /** Cosine up to which two directions count as across each other. */
-  private static final double ACROSS = 0.3;
 
   /** Depth of the body in radii from which its round face may be a corner. */
   private static final double CORNER_DEPTH = 2.5;
