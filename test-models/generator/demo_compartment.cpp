@@ -10,17 +10,17 @@
 #include <vector>
 
 // The demo: cable-end compartment of the fictitious Lake Ombrin pumping station.
-// Three flat bars 60 x 10 mm stand upright at 150 mm pitch in a sheet-steel housing, each on a post insulator.
+// Three flat bars 80 x 30 mm, rounded R12, stand upright at 150 mm pitch in a sheet-steel housing, each on a post insulator.
 static std::vector<Piece> compartment(bool sharpL2, bool sharpL3) {
   std::vector<Piece> all;
   const double pitch = 150, z0 = 160, z1 = 640;
   const char* names[] = {"Busbar L1", "Busbar L2", "Busbar L3"};
   for (int i = 0; i < 3; i++) {
     double x = (i - 1) * pitch;
-    TopoDS_Shape bar = box(x - 5, -30, z0, x + 5, 30, z1);
+    TopoDS_Shape bar = box(x - 15, -40, z0, x + 15, 40, z1);
     bool leaveSharp = (i == 1 && sharpL2) || (i == 2 && sharpL3);
     // The edge left sharp runs up the bar at its front, on the side towards the next phase.
-    bar = filleted(bar, 2, [&](const gp_Pnt& p, const gp_Vec& t) {
+    bar = filleted(bar, 12, [&](const gp_Pnt& p, const gp_Vec& t) {
       bool front = std::abs(t.Z()) > 0.9 && p.Y() < 0 && p.X() > x;
       return !(leaveSharp && front);
     });
@@ -30,8 +30,8 @@ static std::vector<Piece> compartment(bool sharpL2, bool sharpL3) {
   }
   // Shield ring round the upper end of the middle bar.
   gp_Ax2 ring(gp_Pnt(0, 0, z1 - 8), gp_Dir(0, 0, 1));
-  all.push_back(steel(BRepPrimAPI_MakeTorus(ring, 46, 9).Shape(), "Shield ring L2"));
-  TopoDS_Shape spoke = cylinder(4, 2 * 46, gp_Pnt(0, -46, z1 - 8), gp_Dir(0, 1, 0));
+  all.push_back(steel(BRepPrimAPI_MakeTorus(ring, 60, 10).Shape(), "Shield ring L2"));
+  TopoDS_Shape spoke = cylinder(4, 2 * 60, gp_Pnt(0, -60, z1 - 8), gp_Dir(0, 1, 0));
   all.push_back(steel(spoke, "Shield ring spoke L2"));
   // Housing: inside 640 x 420 x 760, sheet 3 mm, a cable opening in the roof and an edged stiffener inside the back.
   TopoDS_Shape housing = hollowBox(640, 420, 760, 3);
@@ -48,7 +48,7 @@ static std::vector<Piece> compartment(bool sharpL2, bool sharpL3) {
 }
 
 void writeDemo(StepFolder& out) {
-  std::string size = "housing inside 640 x 420 x 760 bars 10 x 60 x 480 R2 at pitch 150";
+  std::string size = "housing inside 640 x 420 x 760 bars 30 x 80 x 480 R12 at pitch 150";
   out.write("demo-compartment.step", "demo: one edge of Busbar L2 left sharp", size, compartment(true, false));
   out.write("demo-compartment-mended.step", "demo revision: that edge filleted", size, compartment(false, false));
   out.write("demo-compartment-worse.step", "demo revision: an edge of Busbar L3 sharp as well", size, compartment(true, true));

@@ -96,6 +96,44 @@ class EndToEndTest {
     assertThat(worse.code()).isEqualTo(1);
     assertThat(worse.out()).contains("Busbar L3", "FAIL", "gate: fail");
     assertThat(worse.out().lines()).allMatch(line -> line.length() <= 80);
+    Run mended = run(80, "gate", DEMO.resolve("compartment-mended.yaml"), "--accepted", accepted);
+    assertThat(mended.code()).as(mended.out()).isZero();
+  }
+
+  @Test
+  void theSharpEdgeOfTheDemoIsRedTheRestAmberOrCalm() throws IOException {
+    JsonNode tree = screened("compartment.yaml", 1);
+    assertThat(tree.at("/duties/0/verdict").textValue()).as("service").isEqualTo("pass");
+    int red = 0;
+    int amber = 0;
+    for (JsonNode duty : tree.get("duties")) {
+      for (JsonNode spot : duty.get("hot_spots")) {
+        String feature = spot.get("feature").textValue();
+        String law = spot.get("law").textValue();
+        assertThat(feature.contains("sharp"))
+            .as(feature + ": " + law)
+            .isEqualTo(law.contains("sharp"));
+        if (spot.get("state").textValue().equals("red")) {
+          red++;
+          assertThat(feature).contains("sharp edge 90");
+          assertThat(spot.get("part").textValue()).isEqualTo("Busbar L2");
+        } else {
+          amber++;
+          assertThat(feature).containsAnyOf("rounded corner R12", "torus, section R10");
+        }
+      }
+    }
+    assertThat(red).isPositive();
+    assertThat(amber).isPositive();
+    assertThat(screened("compartment-mended.yaml", 0).get("verdict").textValue())
+        .isEqualTo("amber");
+  }
+
+  private JsonNode screened(String name, int code) throws IOException {
+    Path out = folder.resolve(name + "-out");
+    Run run = run(80, "screen", DEMO.resolve(name), "--out", out);
+    assertThat(run.code()).as(run.out()).isEqualTo(code);
+    return new ObjectMapper().readTree(Files.readString(out.resolve("result.json")));
   }
 
   @Test
