@@ -16,7 +16,7 @@ package org.edgefield.field.edge;
  * </pre>
  *
  * has the sphere's slope at the surface and the sharp corner's field far away; k = 0.68 places the
- * apex where it is. Other corners: not worked out, see the estimate's conservative treatment.
+ * apex where it is. Other corners: the same form with another exponent.
  */
 public final class RoundedCorner {
   /** Exponent s of the field at a right-angled corner. */
@@ -45,8 +45,30 @@ public final class RoundedCorner {
 
   /** How a flux tube from the peak widens: the reciprocal of the decay. */
   public static double spread(double x) {
+    return spread(x, EXPONENT);
+  }
+
+  /**
+   * The same for other corners.
+   *
+   * @param exponent exponent of the field far from the rounding, see {@link #exponent}
+   */
+  public static double spread(double x, double exponent) {
     double y = K * x;
     double g = (1 + FAR_SLOPE * y) / (1 + y);
-    return Math.pow(1 + 2 * x / EXPONENT * g, EXPONENT);
+    return Math.pow(1 + 2 * x / exponent * g, exponent);
+  }
+
+  /**
+   * Exponent at a corner or conical tip by the solid angle through which its rounding turns the
+   * normal: a right-angled corner turns through pi/2, a needle through 2 pi and has the exponent 1.
+   * Between them it is taken linear, which lies above the exponents of cones (a cone of half-angle
+   * 22 degrees: 0.77 for about 0.70, from its Legendre function's degree, recomputed).
+   *
+   * @param turn_sr solid angle of the normals, 0 to 4 pi
+   */
+  public static double exponent(double turn_sr) {
+    double share = (turn_sr - 0.5 * Math.PI) / (1.5 * Math.PI);
+    return EXPONENT + (1 - EXPONENT) * Math.max(0, Math.min(1, share));
   }
 }

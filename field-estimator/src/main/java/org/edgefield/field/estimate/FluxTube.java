@@ -67,6 +67,7 @@ final class FluxTube {
   private double c2;
   private RoundedWedge wedge;
   private boolean corner;
+  private double cornerExponent;
   private double radius;
   private double thickness;
   private double width;
@@ -116,13 +117,19 @@ final class FluxTube {
   }
 
   /**
-   * A corner, made with one radius: the right-angled corner's spread near by, then a plate's
-   * corner, a strip's and a whole body's. Corners whose edges are sharper than a right angle take
-   * the product of the edge law in two directions, which lies on the high side (1.4 to 2.2 on a
-   * cube's corner).
+   * A corner, made with one radius: the right-angled corner's spread (or that of another exponent)
+   * near by, then a plate's corner, a strip's and a whole body's. Corners whose edges are sharper
+   * than a right angle take the product of the edge law in two directions, which lies on the high
+   * side (1.4 to 2.2 on a cube's corner).
    */
   FluxTube corner(
-      RoundedWedge wedge, double radius, double thickness, double width, double endTerm) {
+      RoundedWedge wedge,
+      double radius,
+      double thickness,
+      double width,
+      double endTerm,
+      double exponent) {
+    cornerExponent = exponent;
     edge(wedge, radius, thickness, width, 1 / radius, endTerm, 1, false, 0);
     corner = true;
     return this;
@@ -156,7 +163,7 @@ final class FluxTube {
       return direction(k1, c1, s, reach) * direction(k2, c2, s, reach);
     }
     if (corner && wedge.exponent() <= RIGHT_ANGLE_EXPONENT) {
-      return corner(s, thickness, width, 1 / Math.sqrt(c2));
+      return corner(s, thickness, width, 1 / Math.sqrt(c2), cornerExponent);
     }
     double across =
         wedge.spread(s / radius)
@@ -176,16 +183,18 @@ final class FluxTube {
     double length = 2 / Math.sqrt(c2);
     double thin = Math.min(length, thickness);
     double wide = Math.min(Math.max(length, thickness), width);
-    return Math.min(across * along, corner(s, thin, wide, Math.max(length, width) / 2));
+    double end = corner(s, thin, wide, Math.max(length, width) / 2, RoundedCorner.EXPONENT);
+    return Math.min(across * along, end);
   }
 
   /** Spread at a right-angled corner: its own, then a plate's corner, a strip's, a whole body's. */
-  private double corner(double s, double thin, double wide, double halfLength) {
-    return RoundedCorner.spread(s / radius)
-        * Math.pow(1 + s / (CORNER_SHARE * thin), PLATE_CORNER - RoundedCorner.EXPONENT)
+  private double corner(double s, double thin, double wide, double halfLength, double exponent) {
+    double plate = Math.max(PLATE_CORNER, exponent);
+    return RoundedCorner.spread(s / radius, exponent)
+        * Math.pow(1 + s / (CORNER_SHARE * thin), plate - exponent)
         * Math.pow(
             (1 + s / (CORNER_SHARE * wide)) * (1 + s / (2 * CORNER_SHARE * halfLength)),
-            1 - PLATE_CORNER / 2);
+            1 - plate / 2);
   }
 
   /** Along an edge that bends round a corner: its own radius first, then the corner's exponent. */

@@ -53,7 +53,7 @@ final class Shelter {
               int to = Math.min(sites.count(), (b + 1) * SiteBuilder.BLOCK);
               for (int s = b * SiteBuilder.BLOCK; s < to; s++) {
                 if (electrode[s] >= 0) {
-                  boolean standing = plane != null && isEarth(fieldCase, electrode[s]);
+                  boolean standing = plane != null && earthed(fieldCase, electrode[s]);
                   search.at(s, standing ? plane : null, others[sites.part[s]]);
                 }
               }
@@ -101,11 +101,22 @@ final class Shelter {
         .toArray();
   }
 
+  /** Whether two electrodes have one potential in every duty. */
   private static boolean together(FieldCase fieldCase, int e, int f) {
-    return f >= 0 && (f == e || (isEarth(fieldCase, e) && isEarth(fieldCase, f)));
+    return f >= 0
+        && (f == e
+            || (set(fieldCase, e)
+                && set(fieldCase, f)
+                && fieldCase.duties().stream().allMatch(d -> d.difference_V(e, f) == 0)));
   }
 
-  private static boolean isEarth(FieldCase fieldCase, int electrode) {
-    return fieldCase.electrodes().get(electrode).kind() == Electrode.Kind.EARTH;
+  /** Whether an electrode is at the potential of the earth in every duty. */
+  private static boolean earthed(FieldCase fieldCase, int e) {
+    return set(fieldCase, e)
+        && fieldCase.duties().stream().allMatch(d -> d.real_V()[e] == 0 && d.imaginary_V()[e] == 0);
+  }
+
+  private static boolean set(FieldCase fieldCase, int electrode) {
+    return fieldCase.electrodes().get(electrode).kind() != Electrode.Kind.FLOATING;
   }
 }

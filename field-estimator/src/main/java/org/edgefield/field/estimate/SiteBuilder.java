@@ -8,6 +8,7 @@ import org.edgefield.curvature.Features;
 import org.edgefield.curvature.Features.RoundedEdge;
 import org.edgefield.curvature.SurfaceNodes;
 import org.edgefield.curvature.node.WallThickness;
+import org.edgefield.field.edge.RoundedCorner;
 import org.edgefield.field.edge.RoundedWedge;
 import org.edgefield.field.hotspot.MeshAreas;
 import org.edgefield.field.hotspot.NodeFaces;
@@ -146,31 +147,37 @@ final class SiteBuilder {
   private static final double SPIKE = 2;
 
   /**
-   * How much the surface bends around a node, as the largest angle between its normal and a
-   * neighbour's, per distance. Where a surface degenerates (blends that run out into a point) its
-   * curvature may rise without limit on a spot too small to matter.
+   * How much the surface bends around a node: the largest norm of the shape operator that the
+   * normals of a triangle give, over its triangles. Where a surface degenerates (blends that run
+   * out into a point) its curvature may rise without limit on a spot too small to matter.
    */
   private double[] bends() {
     double[] most = new double[nodes.count()];
-    double[] x = mesh.xyz();
-    double[] normal = nodes.normal();
+    double[] e = new double[6];
+    double[] d = new double[6];
     for (int t = 0; t < mesh.triangleCount(); t++) {
+      int[] corner = nodes.cornerNode();
+      for (int i = 0; i < 6; i++) {
+        int c = i / 3;
+        int k = i % 3;
+        e[i] =
+            mesh.xyz()[3 * mesh.triangles()[3 * t + c + 1] + k]
+                - mesh.xyz()[3 * mesh.triangles()[3 * t] + k];
+        d[i] =
+            nodes.normal()[3 * corner[3 * t + c + 1] + k] - nodes.normal()[3 * corner[3 * t] + k];
+      }
+      double first = Math.sqrt(e[0] * e[0] + e[1] * e[1] + e[2] * e[2]);
+      double along = (e[0] * e[3] + e[1] * e[4] + e[2] * e[5]) / first;
+      double second = e[3] * e[3] + e[4] * e[4] + e[5] * e[5] - along * along;
+      double norm = 0;
+      for (int k = 0; k < 3; k++) {
+        double u = d[k] / first;
+        double w = d[3 + k] - along * u;
+        norm += u * u + w * w / second;
+      }
+      double rate = Math.sqrt(norm);
       for (int c = 0; c < 3; c++) {
-        int i = 3 * t + c;
-        int j = 3 * t + (c + 1) % 3;
-        int a = nodes.cornerNode()[i];
-        int b = nodes.cornerNode()[j];
-        double turned = 0;
-        double apart = 0;
-        for (int k = 0; k < 3; k++) {
-          double dn = normal[3 * a + k] - normal[3 * b + k];
-          double dx = x[3 * mesh.triangles()[i] + k] - x[3 * mesh.triangles()[j] + k];
-          turned += dn * dn;
-          apart += dx * dx;
-        }
-        double rate = Math.sqrt(turned / apart);
-        most[a] = Math.max(most[a], rate);
-        most[b] = Math.max(most[b], rate);
+        most[corner[3 * t + c]] = Math.max(most[corner[3 * t + c]], rate);
       }
     }
     return most;
@@ -386,7 +393,8 @@ final class SiteBuilder {
       if (k1 > 0 && depth[s] > 0 && wide[f] > CORNER_DEPTH * radius) {
         sites.form[s] = Sites.CORNER;
         sites.law[s] = Law.ROUNDED_WEDGE;
-        sites.wedge[s] = turn[f] > RIGHT_CORNER_TURN ? SHARP_CORNER : right;
+        sites.wedge[s] = right;
+        sites.exponent[s] = RoundedCorner.exponent(turn[f]);
         sites.thickness[s] = Math.max(thin[f], 2 * radius);
         sites.width[s] = Math.max(Math.min(next[f], wide[f]), 2 * radius);
         sites.end2[s] = inverseSquare(longestHalf(assembly.parts().get(sites.part[s])));
@@ -402,13 +410,8 @@ final class SiteBuilder {
   /** Solid angle of the turn below which a round face is a corner: short of a hemisphere. */
   private static final double CORNER_TURN = 1.7 * Math.PI;
 
-  /** Solid angle up to which it counts as right-angled (an octant turns through pi / 2). */
-  private static final double RIGHT_CORNER_TURN = 0.55 * Math.PI;
-
   /** Depth of the body in radii from which its round face may be a corner. */
   private static final double CORNER_DEPTH = 2.5;
-
-  private static final RoundedWedge SHARP_CORNER = RoundedWedge.ofInteriorAngle(Math.toRadians(45));
 
   private static double longestHalf(Part part) {
     double[] b = part.bounds_m();

@@ -1,6 +1,7 @@
 package org.edgefield.field.estimate;
 
 import java.util.Arrays;
+import org.edgefield.field.edge.RoundedCorner;
 import org.edgefield.field.edge.RoundedWedge;
 import org.edgefield.field.result.Law;
 
@@ -63,6 +64,9 @@ final class Sites {
   /** Site of the neighbour that shelters, -1 where the earth plane does or nothing. */
   final int[] neighbour;
 
+  /** Exponent of the field at a corner. */
+  final double[] exponent;
+
   /** Wedge of an edge site, else null. */
   final RoundedWedge[] wedge;
 
@@ -87,6 +91,8 @@ final class Sites {
     end2 = new double[count];
     arc = new double[count];
     ahead = new double[count];
+    exponent = new double[count];
+    Arrays.fill(exponent, RoundedCorner.EXPONENT);
     straight = new boolean[count];
     shelter = new double[count];
     neighbour = new int[count];
@@ -178,7 +184,7 @@ final class Sites {
     double t = Math.max(thickness[site], 2 * r);
     double w = Math.max(width[site], 2 * r);
     if (form[site] == CORNER) {
-      return tube.corner(wedge[site], r, t, w, end2[site]);
+      return tube.corner(wedge[site], r, t, w, end2[site], exponent[site]);
     }
     return tube.edge(
         wedge[site],
