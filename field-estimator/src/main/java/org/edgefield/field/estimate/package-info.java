@@ -25,7 +25,7 @@
  *
  * <p>Where it is weak: flanks of slender bodies, away from the peak, down to 0.6; flat faces beside
  * an edge, down to 0.2; bodies sheltered by a neighbour at the same voltage, 1.25 to 2.1; rounded
- * cone tips, up to 1.6; corners as made that are sharper than right-angled ones, up to 2.2; bodies
+ * cone tips, up to 1.6; corners as made that are sharper than right-angled ones, 7 to 9; bodies
  * whose bounding box says little of them (bent, hollow, slanting); floating electrodes, which are
  * given the widest voltage difference of the duty. Field lines are taken as circular arcs.
  */

@@ -10,7 +10,9 @@ import org.edgefield.field.job.FieldCase;
 import org.edgefield.field.job.Surroundings.EarthPlane;
 import org.edgefield.field.result.DutyField;
 import org.edgefield.importer.Progress;
+import org.edgefield.models.exact.spheres.TwoSpheres;
 import org.junit.jupiter.api.AfterAll;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
@@ -175,5 +177,15 @@ class SmoothBodiesTest {
         inner / (outer * (outer - inner)),
         0.995,
         1.005);
+  }
+
+  @Test
+  void aSmallSphereIsShelteredByALargeOneAtItsVoltage() {
+    // Image series; far pole of the sphere of radius 1 at the gap 1 from one of radius 4.
+    double exact = new TwoSpheres(1, 4, 1).farPoleA_V_per_m(1, 1);
+    RevolvedBodies pair = new RevolvedBodies().sphere(0, 1).sphere(6, 4);
+    FieldCase c =
+        RevolvedBodies.fieldCase(new double[] {1, 1}, new boolean[] {false, false}, null, null);
+    within("small sphere by a large one, alike", peak(pair, c, 0), exact, 1.0, 1.3);
   }
 }
