@@ -8,6 +8,7 @@ import org.edgefield.cli.ExitCode;
 import org.edgefield.cli.console.Console;
 import org.edgefield.cli.console.ProgressLine;
 import org.edgefield.cli.console.Table;
+import org.edgefield.cli.console.Wrap;
 import org.edgefield.cli.pipeline.ModelLook;
 import org.edgefield.cli.report.Human;
 import org.edgefield.cli.report.PartLabels;
@@ -72,16 +73,16 @@ final class PartsCommand implements Callable<Integer> {
                 : "R" + Human.number(1e3 * s.smallestConvexRadius_m())
           });
     }
-    console
-        .out()
-        .println(
-            look.source().file()
-                + ": "
-                + look.parts().size()
-                + (look.parts().size() == 1 ? " part, " : " parts, ")
-                + look.source().schema()
-                + ", drawn in "
-                + look.source().unit());
+    String schema = look.source().schema();
+    String head =
+        look.source().file()
+            + ": "
+            + look.parts().size()
+            + (look.parts().size() == 1 ? " part, " : " parts, ")
+            + (schema.isEmpty() ? "" : schema + ", ")
+            + "drawn in "
+            + look.source().unit();
+    console.out().println(Wrap.text(head, console.width()));
     new Table("part", "size, mm", "sharp convex edges", "least radius, mm")
         .print(rows, console.width(), console.out());
     if (!common.quiet) {

@@ -5,10 +5,12 @@ import java.util.List;
 
 /**
  * Plain columns that fit a width: the first column gives way, its entries are cut in the middle.
+ * Where too little of it would be left, every row becomes a line with its name and a sentence with
+ * the rest.
  */
 public final class Table {
   private static final String GAP = "  ";
-  private static final int LEAST = 8;
+  private static final int LEAST = 16;
 
   private final String[] heads;
 
@@ -30,11 +32,24 @@ public final class Table {
     for (int c = 1; c < room.length; c++) {
       others += room[c] + GAP.length();
     }
-    room[0] = Math.max(LEAST, Math.min(room[0], width - others));
+    if (width - others < Math.min(LEAST, room[0])) {
+      rows.forEach(row -> stack(row, width, out));
+      return;
+    }
+    room[0] = Math.min(room[0], width - others);
     line(heads, room, out);
     for (String[] row : rows) {
       line(row, room, out);
     }
+  }
+
+  private void stack(String[] row, int width, PrintStream out) {
+    out.println(cut(row[0], width));
+    StringBuilder rest = new StringBuilder();
+    for (int c = 1; c < row.length; c++) {
+      rest.append(c == 1 ? "  " : ", ").append(heads[c]).append(' ').append(row[c]);
+    }
+    out.println(Wrap.text(rest.toString(), width));
   }
 
   private static void line(String[] cells, int[] room, PrintStream out) {

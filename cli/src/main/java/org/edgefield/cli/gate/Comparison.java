@@ -1,6 +1,7 @@
 package org.edgefield.cli.gate;
 
 import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.MissingNode;
 import java.util.ArrayList;
 import java.util.Iterator;
 import java.util.LinkedHashMap;
@@ -22,10 +23,14 @@ import org.edgefield.cli.gate.GateFinding.Change;
  * part a new hot spot nearer than their spacing counts as part of it; it still fails as worse where
  * its utilisation is above the accepted one.
  *
+ * <p>Utilisations compare only under the same limits, surroundings, edges and voltages: a lower
+ * voltage or a raised limit would hide a worse shape. Where one of them changed the gate fails and
+ * says so, until the new result is looked at and accepted; the findings are shown all the same.
+ *
  * @param findings by duty, in case order
- * @param remarks what differs in limits and voltages, one line each
+ * @param changedConditions what differs in limits, surroundings, edges and voltages, one line each
  */
-record Comparison(Map<String, List<GateFinding>> findings, List<String> remarks) {
+record Comparison(Map<String, List<GateFinding>> findings, List<String> changedConditions) {
 
   /** Peaks nearer than this share their place: edges that meet at a corner. */
   private static final double SAME_PLACE_M = 1e-9;
@@ -44,12 +49,26 @@ record Comparison(Map<String, List<GateFinding>> findings, List<String> remarks)
         .forEach(
             (duty, spots) ->
                 findings.put(duty, duty(spots, accepted.duties().get(duty), tolerance_m, worseBy)));
-    return new Comparison(findings, remarks(now, accepted));
+    return new Comparison(findings, changes(now, accepted));
   }
 
-  /** Whether nothing red is new or worse. */
+  /** Whether the conditions are the accepted ones and nothing red is new or worse. */
   boolean passes() {
+    return changedConditions.isEmpty() && nothingWorse();
+  }
+
+  private boolean nothingWorse() {
     return findings.values().stream().flatMap(List::stream).noneMatch(GateFinding::fails);
+  }
+
+  /** The verdict in words, with the cure where conditions changed. */
+  String verdict() {
+    if (changedConditions.isEmpty()) {
+      return passes() ? "pass" : "fail";
+    }
+    return "fail: judged under other conditions than the accepted result; restore them, or look at"
+        + " the new result and accept it with --accept"
+        + (nothingWorse() ? "" : "; red regions are new or worse as well");
   }
 
   private static void refuseStrangers(GateSide now, GateSide accepted) {
@@ -142,21 +161,48 @@ record Comparison(Map<String, List<GateFinding>> findings, List<String> remarks)
     return now < accepted * (1 - worseBy) ? Change.BETTER : Change.SAME;
   }
 
-  private static List<String> remarks(GateSide now, GateSide accepted) {
-    List<String> remarks = new ArrayList<>();
-    differences("", accepted.conditions(), now.conditions(), remarks);
+  private static List<String> changes(GateSide now, GateSide accepted) {
+    List<String> changes = new ArrayList<>();
+    differences("", accepted.conditions(), now.conditions(), changes);
     accepted
         .voltages()
         .forEach(
             (duty, volts) -> {
-              if (!sameNumbers(volts, now.voltages().get(duty))) {
-                remarks.add("duty " + duty + ": voltages differ from the accepted ones");
+              JsonNode fresh = now.voltages().get(duty);
+              if (!sameNumbers(volts, fresh)) {
+                voltages("duty " + duty + ", ", volts, fresh, changes);
               }
             });
-    return remarks;
+    return changes;
   }
 
-  private static void differences(String path, JsonNode old, JsonNode fresh, List<String> remarks) {
+  private static void voltages(String duty, JsonNode old, JsonNode fresh, List<String> changes) {
+    Map<String, JsonNode> before = byElectrode(old);
+    Map<String, JsonNode> after = byElectrode(fresh);
+    Set<String> electrodes = new LinkedHashSet<>(before.keySet());
+    electrodes.addAll(after.keySet());
+    for (String electrode : electrodes) {
+      JsonNode a = before.getOrDefault(electrode, MissingNode.getInstance());
+      JsonNode b = after.getOrDefault(electrode, MissingNode.getInstance());
+      if (!sameNumbers(a, b)) {
+        changes.add(duty + electrode + ": accepted with " + voltage(a) + ", now " + voltage(b));
+      }
+    }
+  }
+
+  private static Map<String, JsonNode> byElectrode(JsonNode voltages) {
+    Map<String, JsonNode> map = new LinkedHashMap<>();
+    voltages.forEach(v -> map.put(v.path("electrode").asText(), v));
+    return map;
+  }
+
+  private static String voltage(JsonNode node) {
+    return node.isMissingNode()
+        ? "no voltage"
+        : node.path("peak_V") + " V peak at " + node.path("phase_deg") + " deg";
+  }
+
+  private static void differences(String path, JsonNode old, JsonNode fresh, List<String> changes) {
     Set<String> keys = new LinkedHashSet<>();
     for (Iterator<String> it = old.fieldNames(); it.hasNext(); ) {
       keys.add(it.next());
@@ -169,9 +215,9 @@ record Comparison(Map<String, List<GateFinding>> findings, List<String> remarks)
       JsonNode b = fresh.path(key);
       String name = path.isEmpty() ? key : path + "." + key;
       if (a.isObject() && b.isObject()) {
-        differences(name, a, b, remarks);
+        differences(name, a, b, changes);
       } else if (!sameNumbers(a, b)) {
-        remarks.add(name + ": accepted with " + words(a) + ", now " + words(b));
+        changes.add(name + ": accepted with " + words(a) + ", now " + words(b));
       }
     }
   }

@@ -24,7 +24,7 @@ final class GateJson {
           new DefaultPrettyPrinter().withObjectIndenter(new DefaultIndenter("  ", "\n")));
       JsonWriter json = new JsonWriter(generator);
       json.open().put("format", FORMAT).put("gate", comparison.passes() ? "pass" : "fail");
-      json.put("notes", comparison.remarks()).openArray("duties");
+      json.put("changed_conditions", comparison.changedConditions()).openArray("duties");
       for (Map.Entry<String, List<GateFinding>> duty : comparison.findings().entrySet()) {
         json.open().put("name", duty.getKey()).openArray("findings");
         for (GateFinding f : duty.getValue()) {

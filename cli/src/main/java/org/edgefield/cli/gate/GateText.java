@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import org.edgefield.cli.console.Console;
 import org.edgefield.cli.console.Table;
+import org.edgefield.cli.console.Wrap;
 import org.edgefield.cli.gate.GateFinding.Change;
 import org.edgefield.cli.report.Human;
 
@@ -25,8 +26,10 @@ final class GateText {
       }
       console.out().println();
     }
-    comparison.remarks().forEach(r -> console.out().println("note: " + r));
-    console.out().println("gate: " + (comparison.passes() ? "pass" : "fail"));
+    comparison
+        .changedConditions()
+        .forEach(c -> console.out().println(Wrap.text("changed: " + c, console.width())));
+    console.out().println(Wrap.text("gate: " + comparison.verdict(), console.width()));
   }
 
   // Rows for what changed; what stayed or got better is only counted.

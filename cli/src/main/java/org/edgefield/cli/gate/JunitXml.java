@@ -12,6 +12,7 @@ final class JunitXml {
   static String text(Comparison comparison) {
     StringBuilder xml = new StringBuilder("<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n");
     xml.append("<testsuites name=\"edgefield gate\">\n");
+    conditions(comparison.changedConditions(), xml);
     for (Map.Entry<String, List<GateFinding>> duty : comparison.findings().entrySet()) {
       List<GateFinding> findings = duty.getValue();
       xml.append("  <testsuite name=\"").append(escape(duty.getKey())).append('"');
@@ -28,6 +29,20 @@ final class JunitXml {
       xml.append("  </testsuite>\n");
     }
     return xml.append("</testsuites>\n").toString();
+  }
+
+  private static void conditions(List<String> changes, StringBuilder xml) {
+    if (changes.isEmpty()) {
+      return;
+    }
+    xml.append("  <testsuite name=\"conditions\" tests=\"").append(changes.size());
+    xml.append("\" failures=\"").append(changes.size()).append("\">\n");
+    for (String change : changes) {
+      xml.append("    <testcase classname=\"conditions\" name=\"").append(escape(change));
+      xml.append("\">\n      <failure message=\"differs from the accepted result\"/>\n");
+      xml.append("    </testcase>\n");
+    }
+    xml.append("  </testsuite>\n");
   }
 
   private static void testCase(String duty, GateFinding f, StringBuilder xml) {

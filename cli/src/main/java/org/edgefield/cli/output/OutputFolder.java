@@ -11,21 +11,36 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import java.nio.file.StandardOpenOption;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
 import java.util.Map;
+import java.util.Set;
+import java.util.concurrent.locks.ReentrantLock;
 import java.util.stream.Stream;
 import org.edgefield.cli.UserException;
 
 /**
  * A folder of results, written whole or not at all: all files are written and forced to disk in a
- * folder beside the target, then moved into place. Files of others in the target stay. What a stop
- * or a fault leaves behind is removed.
+ * hidden folder, then moved into place. Files of others in the target stay; those of an earlier run
+ * go first, so that old and new never mix: killed in between, the folder lacks its result.json. A
+ * stop waits for the few moves, a fault among them brings the earlier files back, and what either
+ * leaves behind is removed.
  */
 public final class OutputFolder {
   private static final int BUFFER = 1 << 16;
+  private static final String ASIDE = "earlier";
+
+  /** Every file that a run may leave in its folder, the one that vouches for the others first. */
+  private static final List<String> OF_A_RUN =
+      List.of("result.json", "heatmap.glb", "summary.md", "gate.json", "junit.xml");
 
   private final Path target;
   private final Map<String, Content> files = new LinkedHashMap<>();
+
+  /** Held while a file is written or the set is moved; a stop takes it and keeps it. */
+  private final ReentrantLock work = new ReentrantLock();
 
   /** Content of one file. */
   @FunctionalInterface
@@ -83,22 +98,28 @@ public final class OutputFolder {
     Path draft = null;
     Thread removal = null;
     try {
-      Files.createDirectories(target.getParent());
-      draft = Files.createTempDirectory(target.getParent(), "." + target.getFileName() + ".");
+      // Inside an existing folder: it may be a disk of its own, or its surroundings be protected.
+      Path place = Files.isDirectory(target) ? target : target.getParent();
+      Files.createDirectories(place);
+      draft = Files.createTempDirectory(place, "." + target.getFileName() + ".");
       Path half = draft;
-      removal = new Thread(() -> remove(half));
+      removal = new Thread(() -> stop(half));
       Runtime.getRuntime().addShutdownHook(removal);
       for (Map.Entry<String, Content> file : files.entrySet()) {
-        save(draft.resolve(file.getKey()), file.getValue());
-      }
-      if (!moved(draft)) {
-        for (String name : files.keySet()) {
-          Files.move(
-              draft.resolve(name),
-              target.resolve(name),
-              StandardCopyOption.ATOMIC_MOVE,
-              StandardCopyOption.REPLACE_EXISTING);
+        work.lock();
+        try {
+          save(draft.resolve(file.getKey()), file.getValue());
+        } finally {
+          work.unlock();
         }
+      }
+      work.lock();
+      try {
+        if (!moved(draft)) {
+          replace(draft);
+        }
+      } finally {
+        work.unlock();
       }
     } catch (IOException e) {
       throw new UserException(
@@ -123,6 +144,42 @@ public final class OutputFolder {
     } catch (DirectoryNotEmptyException e) {
       return false;
     }
+  }
+
+  private void replace(Path draft) throws IOException {
+    Path aside = Files.createDirectory(draft.resolve(ASIDE));
+    Set<String> earlier = new LinkedHashSet<>(OF_A_RUN);
+    earlier.addAll(files.keySet());
+    List<String> placed = new ArrayList<>();
+    try {
+      for (String name : earlier) {
+        if (Files.isRegularFile(target.resolve(name))) {
+          Files.move(target.resolve(name), aside.resolve(name), StandardCopyOption.ATOMIC_MOVE);
+        }
+      }
+      for (String name : files.keySet()) {
+        Files.move(draft.resolve(name), target.resolve(name), StandardCopyOption.ATOMIC_MOVE);
+        placed.add(name);
+      }
+    } catch (IOException e) {
+      restore(aside, placed);
+      throw e;
+    }
+  }
+
+  private void restore(Path aside, List<String> placed) throws IOException {
+    for (String name : placed) {
+      Files.delete(target.resolve(name));
+    }
+    for (Path file : list(aside)) {
+      Files.move(file, target.resolve(file.getFileName()), StandardCopyOption.ATOMIC_MOVE);
+    }
+  }
+
+  // Never gives the lock back: the writing thread waits at its next file until the process is gone.
+  private void stop(Path draft) {
+    work.lock();
+    remove(draft);
   }
 
   // A temporary folder is private; the result takes the usual rights of its surroundings.
@@ -154,14 +211,21 @@ public final class OutputFolder {
     if (!Files.isDirectory(folder)) {
       return;
     }
-    try (Stream<Path> inside = Files.list(folder)) {
-      for (Path file : inside.toList()) {
-        Files.deleteIfExists(file);
+    try {
+      for (Path inside : list(folder)) {
+        remove(inside);
+        Files.deleteIfExists(inside);
       }
       Files.deleteIfExists(folder);
     } catch (IOException e) {
       // Best effort: the folder is hidden and its name says what it is.
-      folder.toFile().deleteOnExit();
+      return;
+    }
+  }
+
+  private static List<Path> list(Path folder) throws IOException {
+    try (Stream<Path> inside = Files.list(folder)) {
+      return inside.toList();
     }
   }
 

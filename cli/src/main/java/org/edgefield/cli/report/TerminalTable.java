@@ -7,6 +7,7 @@ import java.util.ArrayList;
 import java.util.List;
 import org.edgefield.cli.console.Console;
 import org.edgefield.cli.console.Table;
+import org.edgefield.cli.console.Wrap;
 import org.edgefield.cli.report.Report.DutyReport;
 import org.edgefield.cli.report.Report.Spot;
 
@@ -25,12 +26,13 @@ public final class TerminalTable {
         duty(duty, console, out);
       }
       String word = report.verdict().key();
-      out.println(
+      String verdict =
           "verdict: "
               + (console.colour() ? colour(report.verdict()) + word + PLAIN : word)
               + "   method: "
               + report.method()
-              + uncertainty(report));
+              + uncertainty(report);
+      out.println(Wrap.text(verdict, console.width()));
     }
     return bytes.toString(StandardCharsets.UTF_8);
   }
@@ -42,14 +44,15 @@ public final class TerminalTable {
   }
 
   private static void duty(DutyReport duty, Console console, PrintStream out) {
-    out.println(
+    String head =
         "duty: "
             + duty.name()
             + " ("
             + duty.verdict().key()
             + ", highest utilisation "
             + Human.utilisation(duty.peak().utilisation())
-            + ")");
+            + ")";
+    out.println(Wrap.text(head, console.width()));
     List<Spot> spots = duty.hotSpots().isEmpty() ? List.of(duty.peak()) : duty.hotSpots();
     List<String[]> rows = new ArrayList<>();
     for (Spot spot : spots.subList(0, Math.min(SHOWN, spots.size()))) {
@@ -66,7 +69,7 @@ public final class TerminalTable {
     if (spots.size() > SHOWN) {
       out.println("... and " + (spots.size() - SHOWN) + " more in summary.md");
     }
-    out.println(Human.cure(spots.get(0)));
+    out.println(Wrap.text(Human.cure(spots.get(0)), console.width()));
     out.println();
   }
 

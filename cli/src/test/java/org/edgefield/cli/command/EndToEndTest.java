@@ -160,4 +160,82 @@ class EndToEndTest {
     assertThat(run(80, "scren").code()).isEqualTo(2);
     assertThat(run(60, "gate", "--help").out()).contains("Examples:");
   }
+
+  @Test
+  void narrowTerminalsGetLinesThatFit() throws IOException {
+    Path out = folder.resolve("narrow");
+    Path accepted = folder.resolve("accepted.json");
+    run(80, "gate", DEMO.resolve("compartment.yaml"), "--accepted", accepted, "--accept");
+    for (int width : new int[] {40, 60}) {
+      Run screen = run(width, "screen", DEMO.resolve("compartment.yaml"), "-q", "--out", out);
+      Run parts = run(width, "parts", DEMO.resolve("../step/demo-compartment.step"), "-q");
+      Run gate =
+          run(width, "gate", DEMO.resolve("compartment-worse.yaml"), "--accepted", accepted, "-q");
+      assertThat(screen.code()).isEqualTo(1);
+      assertThat(gate.code()).isEqualTo(1);
+      // A path is not broken, so that it can be copied.
+      assertThat((screen.out() + gate.out()).lines().filter(l -> !l.startsWith("written:")))
+          .allSatisfy(line -> assertThat(line).hasSizeLessThanOrEqualTo(width));
+      assertThat(parts.out().lines().skip(1).filter(l -> !l.contains(".step")))
+          .allSatisfy(line -> assertThat(line).hasSizeLessThanOrEqualTo(width));
+      assertThat(screen.out()).contains("kV/mm", "red");
+      assertThat(gate.out()).contains("FAIL");
+    }
+  }
+
+  @Test
+  void colourOnlyOnATerminalThatWantsIt() {
+    assertThat(screenOut(true, Map.of())).contains("\u001b[31m" + "red");
+    assertThat(screenOut(true, Map.of("NO_COLOR", "1"))).doesNotContain("\u001b");
+    assertThat(screenOut(true, Map.of("TERM", "dumb"))).doesNotContain("\u001b");
+    assertThat(screenOut(false, Map.of())).doesNotContain("\u001b");
+  }
+
+  private String screenOut(boolean terminal, Map<String, String> environment) {
+    ByteArrayOutputStream out = new ByteArrayOutputStream();
+    PrintStream print = new PrintStream(out, true, StandardCharsets.UTF_8);
+    Console console = new Console(print, print, terminal, false, 80, environment);
+    CommandLineRun.run(
+        console,
+        "screen",
+        DEMO.resolve("compartment.yaml").toString(),
+        "-q",
+        "--out",
+        folder.resolve("colour").toString());
+    return out.toString(StandardCharsets.UTF_8);
+  }
+
+  @Test
+  void anEarlierRunOfAnotherKindLeavesNoFileBehind() throws IOException {
+    Path out = folder.resolve("set");
+    Path accepted = folder.resolve("accepted.json");
+    Path demo = DEMO.resolve("compartment.yaml");
+    run(80, "gate", demo, "--accepted", accepted, "--accept", "--out", out);
+    assertThat(out.resolve("gate.json")).exists();
+    run(80, "screen", demo, "--out", out);
+    try (var left = Files.list(out)) {
+      assertThat(left.map(p -> p.getFileName().toString()))
+          .containsExactlyInAnyOrder("result.json", "heatmap.glb", "summary.md");
+    }
+  }
+
+  @Test
+  void missingInputAndWrongUnitNameWhatIsMeant() throws IOException {
+    Path model = folder.resolve("none.step");
+    Path caseFile = folder.resolve("case.yaml");
+    String text =
+        """
+        model: none.step
+        electrodes: [{name: a, parts: ['*']}]
+        duties: [{name: d, voltages: {a: 10 kV}}]
+        """;
+    Files.writeString(caseFile, text);
+    Run missing = run(80, "screen", caseFile);
+    assertThat(missing.code()).isEqualTo(3);
+    assertThat(missing.err().lines()).singleElement().asString().contains(model.toString());
+    Files.writeString(caseFile, text.replace("10 kV", "10 kN"));
+    Run wrong = run(80, "screen", caseFile);
+    assertThat(wrong.code()).isEqualTo(2);
+    assertThat(wrong.err()).contains("case.yaml", "3:", "10 kN");
+  }
 }

@@ -3,7 +3,9 @@ package org.edgefield.cli.gate;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
+import com.fasterxml.jackson.core.JsonProcessingException;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
+import com.fasterxml.jackson.dataformat.yaml.YAMLMapper;
 import java.util.List;
 import java.util.Map;
 import org.edgefield.cli.UserException;
@@ -85,5 +87,43 @@ class ComparisonTest {
         .isInstanceOf(UserException.class)
         .hasMessageContaining("missing now: y; not accepted yet: x")
         .hasMessageContaining("--accept");
+  }
+
+  @Test
+  void changedLimitsAndVoltagesFailWithTheirNames() {
+    GateSpot s = spot("a", "e", 0, 1.5);
+    Comparison c =
+        Comparison.of(
+            side(
+                "{permitted: {margin: 1.1, amber: 0.8}}",
+                "[{electrode: L1, peak_V: 5, phase_deg: 0}]",
+                s),
+            side(
+                "{permitted: {margin: 1, amber: 0.80}}",
+                "[{electrode: L1, peak_V: 10.0, phase_deg: 0}]",
+                s),
+            TOLERANCE_M,
+            0.02);
+    assertThat(c.changedConditions())
+        .containsExactly(
+            "permitted.margin: accepted with 1, now 1.1",
+            "duty d, L1: accepted with 10.0 V peak at 0 deg, now 5 V peak at 0 deg");
+    assertThat(c.findings().get("d")).noneMatch(GateFinding::fails);
+    assertThat(c.passes()).isFalse();
+    assertThat(c.verdict()).startsWith("fail").contains("other conditions", "--accept");
+    assertThat(JunitXml.text(c)).contains("name=\"conditions\" tests=\"2\" failures=\"2\"");
+  }
+
+  private static GateSide side(String conditions, String voltages, GateSpot spot) {
+    YAMLMapper yaml = new YAMLMapper();
+    try {
+      return new GateSide(
+          "screen",
+          yaml.readTree(conditions),
+          Map.of("d", yaml.readTree(voltages)),
+          Map.of("d", List.of(spot)));
+    } catch (JsonProcessingException e) {
+      throw new AssertionError(e);
+    }
   }
 }
