@@ -67,7 +67,7 @@ else
 fi
 echo "edgefield: missing:$missing; installing: ${as:+$as }$command" >&2
 log=$(mktemp) || exit 2
-if ! { $as apt-get update && DEBIAN_FRONTEND=noninteractive $as $command; } >"$log" 2>&1; then
+if ! { $as apt-get update && $as env DEBIAN_FRONTEND=noninteractive $command; } >"$log" 2>&1; then
   tail -n 5 "$log" >&2; rm -f "$log"
   echo "edgefield: the installation failed; run it by hand: ${as:+$as }apt-get update && ${as:+$as }$command" >&2
   exit 2

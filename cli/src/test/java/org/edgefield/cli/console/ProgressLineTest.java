@@ -30,7 +30,7 @@ class ProgressLineTest {
   @Test
   void terminalGetsOneLineThatFitsAndIsWiped() throws InterruptedException {
     assertThat(shown(true, false))
-        .isEqualTo("\rmesh 50 %: a name that is far longer tha\u001b[K\r\u001b[K");
+        .isEqualTo("\rmesh 50 %: a name that is far longer th\u001b[K\r\u001b[K");
   }
 
   @Test
