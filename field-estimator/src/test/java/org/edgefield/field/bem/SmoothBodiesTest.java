@@ -34,7 +34,7 @@ class SmoothBodiesTest {
       Gmres.Outcome out =
           Gmres.solve(
               layer::apply,
-              layer.localInverse(),
+              layer.approximateInverse(),
               new double[][] {one},
               null,
               1e-6,

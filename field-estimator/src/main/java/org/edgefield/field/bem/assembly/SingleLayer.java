@@ -26,11 +26,12 @@ public final class SingleLayer {
   private final Collocation collocation;
   private final boolean mirrored;
   private final Workers workers;
+  private final FarSources sources;
+  private final double[] targets;
   private final FarField far;
   private final int[] start;
   private final int[] column;
   private final double[] value;
-  private final float[] potential;
 
   /**
    * Prepares the operator.
@@ -54,11 +55,11 @@ public final class SingleLayer {
     this.mirrored = mirror != null;
     this.workers = workers;
     double[] points = collocation.points();
-    double[] targets = Arrays.copyOf(points, mirrored ? 2 * points.length : points.length);
+    targets = Arrays.copyOf(points, mirrored ? 2 * points.length : points.length);
     if (mirrored) {
       System.arraycopy(mirror.image(points), 0, targets, points.length, points.length);
     }
-    FarSources sources = FarSources.of(triangles, cornerNode);
+    sources = FarSources.of(triangles, cornerNode);
     far =
         collocation.rows() <= DENSE
             ? new DenseFarField(sources, collocation, targets, workers)
@@ -68,7 +69,6 @@ public final class SingleLayer {
     NearPairs near = new NearPairs(triangles, targets, workers);
     int[][] columns = new int[rows][];
     double[][] values = new double[rows][];
-    float[][] potentials = new float[rows][];
     workers.run(
         (rows + BLOCK - 1) / BLOCK,
         w -> {
@@ -78,7 +78,6 @@ public final class SingleLayer {
               builder.row(i);
               columns[i] = builder.columns();
               values[i] = builder.values();
-              potentials[i] = builder.potentials();
             }
           };
         });
@@ -88,14 +87,11 @@ public final class SingleLayer {
     }
     column = new int[start[rows]];
     value = new double[start[rows]];
-    potential = new float[start[rows]];
     for (int i = 0; i < rows; i++) {
       System.arraycopy(columns[i], 0, column, start[i], columns[i].length);
       System.arraycopy(values[i], 0, value, start[i], values[i].length);
-      System.arraycopy(potentials[i], 0, potential, start[i], potentials[i].length);
       columns[i] = null;
       values[i] = null;
-      potentials[i] = null;
     }
   }
 
@@ -105,7 +101,6 @@ public final class SingleLayer {
     private final int[] slot;
     private int[] touched = new int[256];
     private double[] sum = new double[256];
-    private double[] accurate = new double[256];
     private int size;
 
     RowBuilder(NearPairs near, int rows) {
@@ -138,16 +133,13 @@ public final class SingleLayer {
             if (size == touched.length) {
               touched = Arrays.copyOf(touched, 2 * size);
               sum = Arrays.copyOf(sum, 2 * size);
-              accurate = Arrays.copyOf(accurate, 2 * size);
             }
             k = size++;
             slot[j] = k;
             touched[k] = j;
             sum[k] = 0;
-            accurate[k] = 0;
           }
           sum[k] += weight * near.correction[3 * pair + c];
-          accurate[k] += weight * near.accurate[3 * pair + c];
         }
       }
     }
@@ -159,14 +151,6 @@ public final class SingleLayer {
     double[] values() {
       return Arrays.copyOf(sum, size);
     }
-
-    float[] potentials() {
-      float[] out = new float[size];
-      for (int k = 0; k < size; k++) {
-        out[k] = (float) accurate[k];
-      }
-      return out;
-    }
   }
 
   /** Number of unknowns. */
@@ -174,9 +158,10 @@ public final class SingleLayer {
     return collocation.rows();
   }
 
-  /** Approximate inverse made from the near potentials, to precondition with. */
-  public Gmres.Operator localInverse() {
-    return new LocalInverse(new NearPotentials(start, column, potential), workers);
+  /** Approximate inverse to precondition with. */
+  public Gmres.Operator approximateInverse() {
+    return new ClusterInverse(
+        new PotentialEntries(sources, collocation, targets, start, column, value), workers);
   }
 
   /** Number of stored corrections. */

@@ -59,7 +59,7 @@ record UnitFields(double[][] density, double[][] charge_C, int iterations, doubl
     }
     Gmres.Outcome out =
         Gmres.solve(
-            layer::apply, layer.localInverse(), right, null, RESIDUAL, ITERATIONS, progress);
+            layer::apply, layer.approximateInverse(), right, null, RESIDUAL, ITERATIONS, progress);
     double[][] charge = new double[electrodes][sets];
     for (int k = 0; k < sets; k++) {
       double[] q = charges(surface, out.solution()[k], electrodes);
