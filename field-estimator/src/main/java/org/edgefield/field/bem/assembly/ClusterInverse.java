@@ -13,10 +13,10 @@ import org.ejml.interfaces.linsol.LinearSolverDense;
  *
  * <p>Fine level: the rows are split into compact clusters; each is solved with its strongest
  * neighbours around it, and its own part of the solution is kept (restricted additive Schwarz, Cai
- * and Sarkis 1999, memory). Coarse level: every cluster has one density, that which holds its rows at
- * 1 V by the fine level; the potentials of these densities on one another make a small full system
- * for the net charges. What the fine level gives a cluster in net charge is taken out again, since
- * net charges act far beyond a cluster and are the coarse level's.
+ * and Sarkis 1999, memory). Coarse level: every cluster has one density, that which holds its rows
+ * at 1 V by the fine level; the potentials of these densities on one another make a small full
+ * system for the net charges. What the fine level gives a cluster in net charge is taken out again,
+ * since net charges act far beyond a cluster and are the coarse level's.
  */
 final class ClusterInverse implements Gmres.Operator {
   private static final int CORE = 64;
@@ -225,8 +225,7 @@ final class ClusterInverse implements Gmres.Operator {
             sum += j == row ? 0 : equilibrium[j] * entries.far(row, j);
           }
         } else {
-          sum =
-              entries.far(row, centre[3 * d], centre[3 * d + 1], centre[3 * d + 2], charge[d]);
+          sum = entries.far(row, centre[3 * d], centre[3 * d + 1], centre[3 * d + 2], charge[d]);
         }
         a[c * clusters + d] += sum / samples;
       }
